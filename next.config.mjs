@@ -1,0 +1,10 @@
+/** @type {import('next').NextConfig} */
+const config = {
+  poweredByHeader: false,
+  reactStrictMode: true,
+  // Native and stateful packages stay out of the bundle: server.ts alone makes them.
+  serverExternalPackages: ["sequelize", "sqlite3", "serialport", "pino", "umzug"],
+  devIndicators: false,
+};
+
+export default config;
