@@ -50,6 +50,8 @@ export const startRunSchema = z.object({
   recipeVersionId: z.string().min(1, "Choose a recipe."),
   condition: runConditionSchema,
   cautions: z.array(z.string()),
+  /** How fast a simulated bench's time runs; hardware always runs at 1. */
+  clockSpeed: z.number().min(1).max(1000),
 });
 export type StartRun = z.infer<typeof startRunSchema>;
 
