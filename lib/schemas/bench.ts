@@ -14,7 +14,11 @@ export const benchDeviceSchema = z.object({
 });
 export type BenchDevice = z.infer<typeof benchDeviceSchema>;
 
-export const roomLimitsSchema = z.object({ lowestCelsius: z.number(), highestCelsius: z.number(), highestHumidityPercent: z.number() });
+export const roomLimitsSchema = z.object({
+  lowestCelsius: z.number(),
+  highestCelsius: z.number(),
+  highestHumidityPercent: z.number(),
+});
 
 /** A bench: a place with devices, leads and limits of its own. */
 export const benchSchema = z.object({

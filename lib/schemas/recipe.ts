@@ -31,7 +31,9 @@ export const resistanceSectionSchema = z.object({
     .max(200, "A section holds at most 200 resistances.")
     .refine(isAscending, "Each resistance stands once, in rising order."),
   testVolts: z
-    .array(voltsSchema.refine((value) => value > 0 && value <= 15_000, "A test voltage lies above 0 V and up to 15 kV."))
+    .array(
+      voltsSchema.refine((value) => value > 0 && value <= 15_000, "A test voltage lies above 0 V and up to 15 kV."),
+    )
     .min(1, "Enter at least one test voltage.")
     .max(40, "A section holds at most 40 test voltages.")
     .refine(isAscending, "Each test voltage stands once, in rising order."),

@@ -47,7 +47,16 @@ export const readingFlagSchema = z.enum(["over-range", "repeated"]);
 export type ReadingFlag = z.infer<typeof readingFlagSchema>;
 
 export const troubleCodeSchema = z.enum([
-  "port-lost", "no-answer", "garbled-reply", "wrong-read-back", "not-discharged", "device-error", "refused", "wrong-identity", "storage", "internal",
+  "port-lost",
+  "no-answer",
+  "garbled-reply",
+  "wrong-read-back",
+  "not-discharged",
+  "device-error",
+  "refused",
+  "wrong-identity",
+  "storage",
+  "internal",
 ]);
 export type TroubleCode = z.infer<typeof troubleCodeSchema>;
 
@@ -127,7 +136,13 @@ export type NewRunEvent = { [T in RunEventType]: { type: T; data: RunEventData<T
 
 export const runEventTypes = Object.keys(runEventDataSchemas) as RunEventType[];
 
-const stampSchema = z.object({ seq: z.int().positive(), atMs: z.number(), elapsedMs: z.number(), type: z.enum(runEventTypes as [RunEventType, ...RunEventType[]]), data: z.unknown() });
+const stampSchema = z.object({
+  seq: z.int().positive(),
+  atMs: z.number(),
+  elapsedMs: z.number(),
+  type: z.enum(runEventTypes as [RunEventType, ...RunEventType[]]),
+  data: z.unknown(),
+});
 
 /** Checks one record from outside the process. Throws ZodError. */
 export function parseRunEvent(value: unknown): RunEvent {

@@ -9,7 +9,14 @@ export type RunStatus = z.infer<typeof runStatusSchema>;
 export const endedStatuses: readonly RunStatus[] = ["stopped", "finished"];
 
 export const verdictCountsSchema = z.object({
-  inside: z.int(), doubtful: z.int(), outside: z.int(), unsettled: z.int(), notStated: z.int(), skipped: z.int(), open: z.int(), total: z.int(),
+  inside: z.int(),
+  doubtful: z.int(),
+  outside: z.int(),
+  unsettled: z.int(),
+  notStated: z.int(),
+  skipped: z.int(),
+  open: z.int(),
+  total: z.int(),
 });
 export type VerdictCounts = z.infer<typeof verdictCountsSchema>;
 

@@ -29,6 +29,10 @@ export const untilSteadySchema = z
     message: "The greatest wait is longer than the least wait.",
   });
 
-export const settlingPolicySchema = z.discriminatedUnion("kind", [fixedWaitSchema, scaledWaitSchema, untilSteadySchema]);
+export const settlingPolicySchema = z.discriminatedUnion("kind", [
+  fixedWaitSchema,
+  scaledWaitSchema,
+  untilSteadySchema,
+]);
 export type SettlingPolicy = z.infer<typeof settlingPolicySchema>;
 export type UntilSteady = z.infer<typeof untilSteadySchema>;

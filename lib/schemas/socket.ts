@@ -13,9 +13,7 @@ export const unfollowRunSchema = z.object({ runId: z.string().min(1).max(64) });
  * or why it was refused.
  */
 export type FollowReply =
-  | { kind: "records"; records: RunEvent[] }
-  | { kind: "reload" }
-  | { kind: "refused"; message: string };
+  { kind: "records"; records: RunEvent[] } | { kind: "reload" } | { kind: "refused"; message: string };
 
 export interface ServerToClientEvents {
   "run:records": (message: { runId: string; records: RunEvent[] }) => void;

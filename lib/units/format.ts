@@ -4,7 +4,16 @@ export const THIN_SPACE = "\u2009";
 export const MINUS = "\u2212";
 
 const PREFIXES: ReadonlyMap<number, string> = new Map([
-  [-15, "f"], [-12, "p"], [-9, "n"], [-6, "µ"], [-3, "m"], [0, ""], [3, "k"], [6, "M"], [9, "G"], [12, "T"],
+  [-15, "f"],
+  [-12, "p"],
+  [-9, "n"],
+  [-6, "µ"],
+  [-3, "m"],
+  [0, ""],
+  [3, "k"],
+  [6, "M"],
+  [9, "G"],
+  [12, "T"],
 ]);
 
 export interface FormatOptions {
@@ -27,7 +36,11 @@ function placePoint(figures: string, integerDigits: number): string {
 }
 
 /** Number and prefixed unit of a quantity, apart, for layouts that set them differently: `{ number: "10.00", unit: "GΩ" }`. */
-export function engineeringParts(value: number, unit: string, options: FormatOptions = {}): { number: string; unit: string } {
+export function engineeringParts(
+  value: number,
+  unit: string,
+  options: FormatOptions = {},
+): { number: string; unit: string } {
   const { digits = 4, signed = false } = options;
   const sign = value < 0 ? MINUS : signed && value > 0 ? "+" : "";
   if (value === 0) return { number: "0", unit };
@@ -87,7 +100,9 @@ export function formatExactDuration(seconds: number): string {
   const h = Math.floor(whole / 3600);
   const min = Math.floor((whole % 3600) / 60);
   const s = String(whole % 60).padStart(h || min ? 2 : 1, "0");
-  return [h ? `${h} h` : "", h || min ? `${String(min).padStart(h ? 2 : 1, "0")} min` : "", `${s} s`].filter(Boolean).join(" ");
+  return [h ? `${h} h` : "", h || min ? `${String(min).padStart(h ? 2 : 1, "0")} min` : "", `${s} s`]
+    .filter(Boolean)
+    .join(" ");
 }
 
 function trueMinus(text: string): string {

@@ -3,7 +3,24 @@ import { ohms, volts, type Ohms, type Volts } from "./quantities";
 export type Parsed<T> = { ok: true; value: T } | { ok: false; message: string };
 
 const EXPONENTS: Readonly<Record<string, number>> = {
-  "": 0, f: -15, p: -12, n: -9, u: -6, µ: -6, μ: -6, m: -3, k: 3, K: 3, M: 6, MEG: 6, Meg: 6, meg: 6, G: 9, g: 9, T: 12, t: 12,
+  "": 0,
+  f: -15,
+  p: -12,
+  n: -9,
+  u: -6,
+  µ: -6,
+  μ: -6,
+  m: -3,
+  k: 3,
+  K: 3,
+  M: 6,
+  MEG: 6,
+  Meg: 6,
+  meg: 6,
+  G: 9,
+  g: 9,
+  T: 12,
+  t: 12,
 };
 
 const QUANTITY = /^([+\-\u2212]?(?:\d+(?:[.,]\d*)?|[.,]\d+)(?:[eE][+\-\u2212]?\d+)?)\s*([a-zµμ]*?)$/iu;
@@ -36,17 +53,24 @@ function stripUnit(text: string, unitNames: readonly string[]): string {
 export function parseOhms(text: string): Parsed<Ohms> {
   const parsed = parseQuantity(text, ["ohms", "ohm", "Ω", "Ω"], "a resistance such as 10 MΩ");
   if (!parsed.ok) return parsed;
-  return parsed.value > 0 ? { ok: true, value: ohms(parsed.value) } : { ok: false, message: "A resistance is more than 0 Ω." };
+  return parsed.value > 0
+    ? { ok: true, value: ohms(parsed.value) }
+    : { ok: false, message: "A resistance is more than 0 Ω." };
 }
 
 /** Reads a test voltage above zero, for example `500 V` or `1 kV`. */
 export function parseVolts(text: string): Parsed<Volts> {
   const parsed = parseQuantity(text, ["volts", "volt", "V"], "a voltage such as 500 V");
   if (!parsed.ok) return parsed;
-  return parsed.value > 0 ? { ok: true, value: volts(parsed.value) } : { ok: false, message: "A test voltage is more than 0 V." };
+  return parsed.value > 0
+    ? { ok: true, value: volts(parsed.value) }
+    : { ok: false, message: "A test voltage is more than 0 V." };
 }
 
 /** Splits a typed or pasted list at line ends, semicolons, tabs, and commas that are followed by a space. */
 export function splitList(text: string): string[] {
-  return text.split(/[\n;\t]|,(?=\s)/u).map((part) => part.trim()).filter(Boolean);
+  return text
+    .split(/[\n;\t]|,(?=\s)/u)
+    .map((part) => part.trim())
+    .filter(Boolean);
 }
