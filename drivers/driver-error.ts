@@ -3,6 +3,7 @@ export type DriverErrorCode =
   | "no-answer"
   | "garbled-reply"
   | "wrong-read-back"
+  | "not-discharged"
   | "device-error"
   | "refused"
   | "wrong-identity";

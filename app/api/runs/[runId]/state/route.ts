@@ -1,0 +1,9 @@
+import { AppError } from "@/lib/server/app-error";
+import { handler } from "@/lib/server/handler";
+import { getServices } from "@/lib/server/services";
+
+export const GET = handler<{ runId: string }>("run.watch", async ({ params }) => {
+  const state = await getServices().runs.state(params.runId);
+  if (!state) throw new AppError("not-found", "There is no such run.");
+  return Response.json(state);
+});
