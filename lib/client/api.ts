@@ -67,7 +67,8 @@ async function receive(path: string, signal?: AbortSignal): Promise<unknown> {
 }
 
 async function send(method: "POST" | "DELETE", path: string, body?: unknown, signal?: AbortSignal): Promise<unknown> {
-  const content = body === undefined ? {} : { body: JSON.stringify(body), headers: { "content-type": "application/json" } };
+  const content =
+    body === undefined ? {} : { body: JSON.stringify(body), headers: { "content-type": "application/json" } };
   return call(path, { method, signal, ...content });
 }
 

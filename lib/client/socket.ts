@@ -15,6 +15,9 @@ export interface LiveLink {
 /** Silence after which a connection that claims to be up is made anew: after a sleep it may be dead without knowing. */
 const DOUBTFUL_AFTER_MS = 2500;
 
+const TURNED_AWAY_PAUSE_MS = 2000;
+const SESSION_ENDED = "This session has ended.";
+
 let shared: LiveLink | null = null;
 
 /** The one connection that all live parts of the page share; made at the first call, in the browser only. */
@@ -41,15 +44,17 @@ function keepContact(socket: LiveSocket, contact: ContactStore): void {
   socket.on("connect", () => contact.getState().heard(Date.now()));
   socket.onAny(() => contact.getState().heard(Date.now()));
   socket.on("connect_error", (error) => {
-    // An inactive socket was turned away by the server; otherwise the network failed and the socket tries again.
-    if (!socket.active) contact.getState().refused(error.message);
+    // While active, the socket tries again by itself; an inactive one was turned away by the server.
+    if (socket.active) return;
+    if (error.message === "unauthenticated") contact.getState().refused(SESSION_ENDED);
+    else setTimeout(() => socket.connect(), TURNED_AWAY_PAUSE_MS);
   });
   socket.on("disconnect", (reason) => {
-    if (reason === "io server disconnect") contact.getState().refused("The session has ended. Sign in again.");
+    if (reason === "io server disconnect") contact.getState().refused(SESSION_ENDED);
   });
   setInterval(() => {
     contact.getState().check(Date.now());
-    renewWhenSilent(socket, contact, STALE_AFTER_MS);
+    if (socket.connected && isSilent(contact, STALE_AFTER_MS)) renew(socket);
   }, 1000);
 }
 
@@ -58,18 +63,19 @@ function watchForWaking(socket: LiveSocket, contact: ContactStore): Set<() => vo
   const wake = () => {
     if (document.visibilityState === "hidden") return;
     contact.getState().check(Date.now());
-    renewWhenSilent(socket, contact, DOUBTFUL_AFTER_MS);
-    for (const listener of listeners) listener();
+    if (isSilent(contact, DOUBTFUL_AFTER_MS)) renew(socket);
+    else for (const listener of listeners) listener();
   };
   document.addEventListener("visibilitychange", wake);
   for (const event of ["pageshow", "online"]) window.addEventListener(event, wake);
   return listeners;
 }
 
-/** Every follower asks again on the `connect` that follows. */
-function renewWhenSilent(socket: LiveSocket, contact: ContactStore, silenceMs: number): void {
-  const { lastHeardMs, refusal } = contact.getState();
-  if (refusal || Date.now() - lastHeardMs <= silenceMs) return;
-  if (socket.connected) socket.disconnect();
-  if (!socket.active || !socket.connected) socket.connect();
+function isSilent(contact: ContactStore, forMs: number): boolean {
+  return Date.now() - contact.getState().lastHeardMs > forMs;
+}
+
+/** Gives the connection up and makes it anew at once, whatever pause the socket was in. Followers ask again on `connect`. */
+function renew(socket: LiveSocket): void {
+  socket.disconnect().connect();
 }
