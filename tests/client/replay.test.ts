@@ -11,29 +11,10 @@ import {
 import { CHECKPOINT_EVERY, createTimeline } from "@/lib/client/replay-timeline";
 import { applyRunEvent } from "@/lib/journal/apply-run-event";
 import { emptyRun } from "@/lib/journal/run-state";
-import type { JournalColumns, ReadingColumns } from "@/lib/schemas/journal-columns";
-import type { RunEvent, RunEventOf } from "@/lib/schemas/run-event";
-import { sampleJournal } from "./sample-journal";
+import type { RunEvent } from "@/lib/schemas/run-event";
+import { sampleJournal, toColumns } from "./sample-journal";
 
 const records = sampleJournal();
-
-function toColumns(journal: RunEvent[]): JournalColumns {
-  const taken = journal.filter((record): record is RunEventOf<"reading.taken"> => record.type === "reading.taken");
-  const readings: ReadingColumns = {
-    seq: taken.map((record) => record.seq),
-    atMs: taken.map((record) => record.atMs),
-    elapsedMs: taken.map((record) => record.elapsedMs),
-    point: taken.map((record) => record.data.point),
-    attempt: taken.map((record) => record.data.attempt),
-    phase: taken.map((record) => record.data.phase),
-    ohms: taken.map((record) => record.data.ohms),
-    volts: taken.map((record) => record.data.volts),
-    amperes: taken.map((record) => record.data.amperes),
-    flags: taken.map((record) => record.data.flags),
-    raw: taken.map((record) => record.data.raw),
-  };
-  return { events: journal.filter((record) => record.type !== "reading.taken"), readings };
-}
 
 /** The sample with `count` readings more in the attempt on its first point. */
 function longJournal(count: number): RunEvent[] {
@@ -125,10 +106,11 @@ describe("the replay's clock", () => {
     expect(advance(timeline, 1000, 16, 10)).toBe(1160);
   });
 
-  it("jumps over the hour in which the run stood still", () => {
+  it("shows for a moment that the run stood still, then jumps over the hour", () => {
     const resumed = records.find((record) => record.type === "run.resumed")!;
     const interrupted = records.find((record) => record.type === "run.interrupted")!;
-    expect(advance(timeline, interrupted.elapsedMs, 16, 1)).toBe(resumed.elapsedMs);
+    expect(advance(timeline, interrupted.elapsedMs, 16, 1)).toBe(interrupted.elapsedMs + 16);
+    expect(advance(timeline, interrupted.elapsedMs, 1600, 1)).toBe(resumed.elapsedMs);
   });
 
   it("ends at the last record", () => {

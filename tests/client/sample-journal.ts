@@ -1,6 +1,7 @@
 import { emptyRun } from "@/lib/journal/run-state";
 import { applyRunEvent } from "@/lib/journal/apply-run-event";
-import { parseRunEvent, type RunEvent } from "@/lib/schemas/run-event";
+import type { JournalColumns, ReadingColumns } from "@/lib/schemas/journal-columns";
+import { parseRunEvent, type RunEvent, type RunEventOf } from "@/lib/schemas/run-event";
 
 const person = { id: "person-1", name: "Ines Marlow" };
 const calibration = { certificate: "K-2291", calibratedOn: "2026-02-01", dueOn: "2027-02-01" };
@@ -200,3 +201,22 @@ export function sampleJournal(): RunEvent[] {
 }
 
 export const foldAll = (records: readonly RunEvent[]) => records.reduce(applyRunEvent, emptyRun);
+
+/** As the journal comes over HTTP. */
+export function toColumns(journal: RunEvent[]): JournalColumns {
+  const taken = journal.filter((record): record is RunEventOf<"reading.taken"> => record.type === "reading.taken");
+  const readings: ReadingColumns = {
+    seq: taken.map((record) => record.seq),
+    atMs: taken.map((record) => record.atMs),
+    elapsedMs: taken.map((record) => record.elapsedMs),
+    point: taken.map((record) => record.data.point),
+    attempt: taken.map((record) => record.data.attempt),
+    phase: taken.map((record) => record.data.phase),
+    ohms: taken.map((record) => record.data.ohms),
+    volts: taken.map((record) => record.data.volts),
+    amperes: taken.map((record) => record.data.amperes),
+    flags: taken.map((record) => record.data.flags),
+    raw: taken.map((record) => record.data.raw),
+  };
+  return { events: journal.filter((record) => record.type !== "reading.taken"), readings };
+}
