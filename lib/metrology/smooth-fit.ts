@@ -1,0 +1,158 @@
+import {
+  joinOutlooks,
+  LEAST_SECONDS,
+  logSpaced,
+  MOST_SECONDS,
+  normalProbability,
+  plannedLogBelief,
+  type ExponentialOutlook,
+  type TimeConstantOutlook,
+} from "./exponential";
+import type { DisplayValue } from "./settling-trace";
+
+/** A trace made ready for fitting: values relative to the latest one, times from the first one. */
+export interface SmoothTrace {
+  values: readonly DisplayValue[];
+  /** Display step, relative to the latest value. */
+  step: number;
+  /** Tolerance for having arrived, relative to the latest value. */
+  tolerance: number;
+  plannedSeconds: number;
+}
+
+export interface SmoothFit extends ExponentialOutlook {
+  /** Scatter of the display values about the fit, relative to the latest value. */
+  scatter: number;
+}
+
+/** Values joined into one, for speed. */
+interface Bin {
+  seconds: number;
+  value: number;
+  count: number;
+}
+
+/** One least-squares solution y = end + amplitude · exp(-t/tau), with its matrix inverse before scaling by the scatter. */
+interface Solution {
+  timeConstantSeconds: number;
+  end: number;
+  amplitude: number;
+  /** Sum of weighted squares, the prior's included. */
+  squares: number;
+  inverse: { endEnd: number; amplitudeAmplitude: number };
+  determinant: number;
+  lastDecay: number;
+}
+
+const MOST_BINS = 64;
+const GRID = 20;
+/** A scatter expected before there are enough values to tell, as a fraction of the value, and its weight in values. */
+const USUAL_SCATTER = 0.0007;
+const USUAL_WEIGHT = 2;
+/** Amplitude at the first sample, as a fraction of the value: a trace begins somewhere between nothing and twice its end. */
+const USUAL_AMPLITUDE = 1;
+
+/**
+ * Least-squares fit of end + amplitude · exp(-t/tau) to display values whose steps are small beside their noise.
+ *
+ * For a fixed tau the fit is linear; tau runs over a grid that narrows round the best one, and each value of it counts
+ * by its evidence. Null with fewer than three values.
+ * Source: JCGM 100:2008, H.3 for the linear part; the joint answer is the mean over tau by Bayes' rule.
+ */
+export function fitSmooth(trace: SmoothTrace): SmoothFit | null {
+  if (trace.values.length < 3) return null;
+  const bins = binned(trace.values);
+  const usual = USUAL_SCATTER ** 2 + trace.step ** 2 / 12;
+  let taus = logSpaced(LEAST_SECONDS, MOST_SECONDS, GRID);
+  let variance = usual;
+  let outlooks: TimeConstantOutlook[] = [];
+  for (let round = 0; round < 3; round += 1) {
+    const solutions = taus.map((tau) => solve(bins, tau, variance));
+    variance = scatterVariance(solutions, trace.values.length, usual);
+    outlooks = solutions.map((solution) => outlookOf(solution, variance, trace));
+    const narrower = narrowed(outlooks);
+    if (!narrower) break;
+    taus = narrower;
+  }
+  const joined = joinOutlooks(outlooks);
+  return joined && { ...joined, scatter: Math.sqrt(variance) };
+}
+
+function binned(values: readonly DisplayValue[]): Bin[] {
+  const scale = values.at(-1)!.ohms || 1;
+  const from = values[0]!.seconds;
+  const size = Math.ceil(values.length / MOST_BINS);
+  return Array.from({ length: Math.ceil(values.length / size) }, (_, index) => {
+    const group = values.slice(index * size, (index + 1) * size);
+    const count = group.length;
+    return {
+      seconds: group.reduce((sum, { seconds }) => sum + seconds, 0) / count - from,
+      value: group.reduce((sum, { ohms }) => sum + ohms, 0) / count / scale - 1,
+      count,
+    };
+  });
+}
+
+function solve(bins: readonly Bin[], timeConstantSeconds: number, variance: number): Solution {
+  let [n, su, suu, sy, suy, syy] = [0, 0, variance / USUAL_AMPLITUDE ** 2, 0, 0, 0];
+  let decay = 1;
+  for (const { seconds, value, count } of bins) {
+    decay = Math.exp(-seconds / timeConstantSeconds);
+    n += count;
+    su += count * decay;
+    suu += count * decay * decay;
+    sy += count * value;
+    suy += count * decay * value;
+    syy += count * value * value;
+  }
+  const determinant = n * suu - su * su;
+  const end = (suu * sy - su * suy) / determinant;
+  const amplitude = (n * suy - su * sy) / determinant;
+  return {
+    timeConstantSeconds,
+    end,
+    amplitude,
+    squares: Math.max(0, syy - end * sy - amplitude * suy),
+    inverse: { endEnd: suu / determinant, amplitudeAmplitude: n / determinant },
+    determinant,
+    lastDecay: decay,
+  };
+}
+
+function scatterVariance(solutions: readonly Solution[], count: number, usual: number): number {
+  const least = Math.min(...solutions.map(({ squares }) => squares));
+  return (USUAL_WEIGHT * usual + least) / (USUAL_WEIGHT + Math.max(0, count - 3));
+}
+
+function outlookOf(solution: Solution, variance: number, trace: SmoothTrace): TimeConstantOutlook {
+  const { timeConstantSeconds, amplitude, lastDecay, inverse } = solution;
+  const residual = -amplitude * lastDecay;
+  const deviation = lastDecay * Math.sqrt(variance * inverse.amplitudeAmplitude);
+  const { tolerance, plannedSeconds } = trace;
+  return {
+    timeConstantSeconds,
+    logWeight:
+      -solution.squares / (2 * variance) -
+      0.5 * Math.log(solution.determinant) +
+      plannedLogBelief(timeConstantSeconds, plannedSeconds),
+    end: 1 + solution.end,
+    endVariance: variance * inverse.endEnd,
+    arrivedProbability: probabilityWithin(residual, deviation, tolerance),
+    minuteMovement: residual * (1 - Math.exp(-60 / timeConstantSeconds)),
+  };
+}
+
+function probabilityWithin(centre: number, deviation: number, tolerance: number): number {
+  if (deviation < 1e-12) return Math.abs(centre) <= tolerance ? 1 : 0;
+  return normalProbability((tolerance - centre) / deviation) - normalProbability((-tolerance - centre) / deviation);
+}
+
+/** A grid round the best time constant where the present one is too coarse for it; null where it is fine enough. */
+function narrowed(outlooks: readonly TimeConstantOutlook[]): number[] | null {
+  const best = outlooks.reduce((at, { logWeight }, index) => (logWeight > outlooks[at]!.logWeight ? index : at), 0);
+  const below = outlooks[Math.max(0, best - 1)]!;
+  const above = outlooks[Math.min(outlooks.length - 1, best + 1)]!;
+  const top = outlooks[best]!.logWeight;
+  const isFine = [below, above].some((outlook) => outlook !== outlooks[best] && top - outlook.logWeight < 2);
+  return isFine ? null : logSpaced(below.timeConstantSeconds, above.timeConstantSeconds, GRID);
+}
