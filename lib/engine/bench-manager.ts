@@ -38,7 +38,9 @@ export class BenchManager {
   #idleOutput: OutputState = { state: "unknown", volts: null };
   #room: Room | null = null;
   #trouble: string | null = null;
-  #reserved = false;
+  /** The device work of one caller after the other. */
+  #turn: Promise<unknown> = Promise.resolve();
+  #waiting = 0;
 
   constructor(private readonly dependencies: BenchManagerDependencies) {
     this.safeState = new SafeState(dependencies.devices, dependencies.bench, dependencies.clock);
@@ -67,7 +69,7 @@ export class BenchManager {
 
   /** A run is being started or measured: its devices are not to be touched. */
   get isBusy(): boolean {
-    return this.#reserved || this.#active?.sequence != null;
+    return this.#waiting > 0 || this.#active?.sequence != null;
   }
 
   snapshot(): BenchSnapshot {
@@ -104,18 +106,18 @@ export class BenchManager {
   /** Looks after an idle bench: lost ports are opened again, the output is proven off, the room is read. */
   async lookAfter(): Promise<void> {
     if (this.isBusy) return;
-    this.#reserved = true;
-    try {
-      await this.dependencies.devices.reopen();
-      const trouble = await this.makeSafe();
-      if (!trouble) await this.readRoom();
-    } catch (error) {
-      const trouble = describeTrouble(error);
-      this.#trouble = `${trouble.message} ${trouble.cure}`.trim();
-    } finally {
-      this.#reserved = false;
+    await this.#exclusive(async () => {
+      if (this.#active?.sequence) return;
+      try {
+        await this.devices.reopen();
+        const trouble = await this.makeSafe();
+        if (!trouble) await this.readRoom();
+      } catch (error) {
+        const trouble = describeTrouble(error);
+        this.#trouble = `${trouble.message} ${trouble.cure}`.trim();
+      }
       this.#tell();
-    }
+    });
   }
 
   async readRoom(): Promise<Room> {
@@ -124,17 +126,14 @@ export class BenchManager {
   }
 
   /**
-   * Keeps the bench for one caller while `act` runs. Throws EngineError `bench-busy` when a run is on it or
-   * another caller has it.
+   * Keeps the free bench for one caller while `act` runs; callers wait for each other.
+   * Throws EngineError `bench-busy` when a run is on it.
    */
-  async reserve<T>(act: () => Promise<T>): Promise<T> {
-    if (this.isBusy || this.#active) throw this.#busy();
-    this.#reserved = true;
-    try {
-      return await act();
-    } finally {
-      this.#reserved = false;
-    }
+  reserve<T>(act: () => Promise<T>): Promise<T> {
+    return this.#exclusive(() => {
+      if (this.#active) throw this.#busy();
+      return act();
+    });
   }
 
   /** Begins a run on a bench that the caller has reserved. Resolves when `run.started` is committed. */
@@ -244,10 +243,8 @@ export class BenchManager {
     await recorder.record({ type: "run.stopped", data: { by: wish.by, reason: wish.reason } });
   }
 
-  async #resume(active: ActiveRun, by: Actor): Promise<void> {
-    if (this.#reserved) throw this.#busy();
-    this.#reserved = true;
-    try {
+  #resume(active: ActiveRun, by: Actor): Promise<void> {
+    return this.#exclusive(async () => {
       await this.devices.reopen();
       await this.#proveSameUnit(active);
       const trouble = await this.makeSafe();
@@ -256,9 +253,7 @@ export class BenchManager {
       await active.recorder.record({ type: "run.resumed", data: { by, room } });
       active.control.answer();
       this.#launch(active);
-    } finally {
-      this.#reserved = false;
-    }
+    });
   }
 
   /** After a lost port another instrument may answer under the old name. */
@@ -270,6 +265,16 @@ export class BenchManager {
       "not-ready",
       `The tester that answers has serial number ${serialNumber}; this run is of ${expected}. Connect the unit of this run, then resume.`,
     );
+  }
+
+  #exclusive<T>(act: () => Promise<T>): Promise<T> {
+    this.#waiting += 1;
+    const done = this.#turn.then(act).finally(() => {
+      this.#waiting -= 1;
+    });
+    // The next caller's turn comes whether this one succeeds or fails.
+    this.#turn = done.catch(() => undefined);
+    return done;
   }
 
   #tell(): void {

@@ -15,4 +15,6 @@ export interface Clock {
    * so that a fast clock does not turn ordinary latency into time-outs.
    */
   deadline(ms: number, callback: () => void): () => void;
+  /** Lets real work, such as a database commit, end before bench time goes on. Returns that work. */
+  hold<T>(work: Promise<T>): Promise<T>;
 }

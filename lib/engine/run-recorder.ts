@@ -4,8 +4,8 @@ import type { NewRunEvent, RunEvent } from "@/lib/schemas/run-event";
 import type { Clock } from "./clock";
 import { EngineError } from "./engine-error";
 
-/** Readings wait at most so long (real milliseconds) before they are committed. */
-const FLUSH_MS = 200;
+/** Readings are committed at once after a quiet spell, else gathered for so many real milliseconds. */
+const GATHER_MS = 50;
 
 export interface RecorderDependencies {
   runId: string;
@@ -31,6 +31,7 @@ export class RunRecorder {
   #pending: RunEvent[] = [];
   #flushing: Promise<void> | null = null;
   #cancelTimer: (() => void) | null = null;
+  #lastFlushMs = -Infinity;
   #failure: EngineError | null = null;
 
   constructor(private readonly dependencies: RecorderDependencies) {
@@ -89,11 +90,12 @@ export class RunRecorder {
 
   #armTimer(): void {
     if (this.#cancelTimer || this.#flushing) return;
+    const waitMs = Math.max(0, this.#lastFlushMs + GATHER_MS - performance.now());
     const timer = setTimeout(() => {
       this.#cancelTimer = null;
       // A failed commit is kept in #failure and met by the next record.
       this.commit().catch(() => undefined);
-    }, FLUSH_MS);
+    }, waitMs);
     this.#cancelTimer = () => clearTimeout(timer);
   }
 
@@ -101,8 +103,9 @@ export class RunRecorder {
     const records = this.#pending;
     this.#pending = [];
     if (records.length === 0) return;
+    this.#lastFlushMs = performance.now();
     try {
-      await this.dependencies.append(this.runId, records);
+      await this.dependencies.clock.hold(this.dependencies.append(this.runId, records));
     } catch (cause) {
       this.#failure = new EngineError(
         "storage",

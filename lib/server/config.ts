@@ -21,10 +21,11 @@ const environmentSchema = z.object({
         .filter(Boolean),
     ),
   STEPWELL_DATA: z.string().min(1).default("data"),
-  STEPWELL_DEMO: onOff("on"),
+  /** `register` lays people, instruments and recipes without past runs. */
+  STEPWELL_DEMO: z.enum(["on", "register", "off"]).default("on"),
   STEPWELL_SESSION_SECRET: z.string().min(32, "needs at least 32 characters").optional(),
   STEPWELL_SECURE_COOKIES: onOff("off"),
-  STEPWELL_LOG: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
+  STEPWELL_LOG: z.enum(["debug", "info", "warn", "error", "silent"]).default("warn"),
 });
 
 export interface Config {
@@ -32,7 +33,7 @@ export interface Config {
   host: string;
   allowedHosts: string[];
   dataFolder: string;
-  isDemo: boolean;
+  demo: "on" | "register" | "off";
   sessionSecret: string | undefined;
   secureCookies: boolean;
   logLevel: "debug" | "info" | "warn" | "error" | "silent";
@@ -52,7 +53,7 @@ export function readConfig(environment: NodeJS.ProcessEnv): Config {
     host: values.STEPWELL_HOST,
     allowedHosts: ["localhost", "127.0.0.1", "[::1]", ...values.STEPWELL_ALLOWED_HOSTS],
     dataFolder: path.resolve(values.STEPWELL_DATA),
-    isDemo: values.STEPWELL_DEMO,
+    demo: values.STEPWELL_DEMO,
     sessionSecret: values.STEPWELL_SESSION_SECRET,
     secureCookies: values.STEPWELL_SECURE_COOKIES,
     logLevel: values.STEPWELL_LOG,

@@ -1,3 +1,4 @@
+import type { SignInOutcome } from "@/lib/auth/sign-in";
 import type { Repositories } from "@/lib/data/repositories";
 import type { RunState } from "@/lib/journal/run-state";
 import type { BenchSnapshot } from "@/lib/schemas/bench";
@@ -18,11 +19,6 @@ export interface RunServices {
   /** Live state of an active run, else the folded journal; null for an unknown run. */
   state(runId: string): Promise<RunState | null>;
 }
-
-export type SignInOutcome =
-  | { kind: "signed-in"; cookie: string }
-  | { kind: "refused"; message: string }
-  | { kind: "slowed"; message: string; retryAfterSeconds: number };
 
 export interface AuthServices {
   /** Checks the password; the cookie is the whole `Set-Cookie` value. */

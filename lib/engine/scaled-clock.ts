@@ -1,0 +1,76 @@
+import type { Clock } from "./clock";
+
+const LOWEST_SPEED = 1;
+const HIGHEST_SPEED = 1000;
+/** setTimeout takes no longer delay than this. */
+const LONGEST_TIMER_MS = 2 ** 31 - 1;
+
+/** The machine's own time, 1 to 1000 times as fast. Hardware runs at 1. */
+export class ScaledClock implements Clock {
+  #speed: number;
+  #realOrigin = performance.now();
+  #benchOrigin = 0;
+
+  /** Throws RangeError for a speed outside 1 to 1000. */
+  constructor(speed = 1) {
+    this.#speed = checkedSpeed(speed);
+  }
+
+  get speed(): number {
+    return this.#speed;
+  }
+
+  /** Changes the speed; bench time goes on without a jump. Throws RangeError for a speed outside 1 to 1000. */
+  setSpeed(speed: number): void {
+    const checked = checkedSpeed(speed);
+    this.#benchOrigin = this.monotonicMs();
+    this.#realOrigin = performance.now();
+    this.#speed = checked;
+  }
+
+  nowMs(): number {
+    return Date.now();
+  }
+
+  monotonicMs(): number {
+    return this.#benchOrigin + (performance.now() - this.#realOrigin) * this.#speed;
+  }
+
+  sleep(ms: number, signal?: AbortSignal): Promise<void> {
+    return new Promise((resolve, reject) => {
+      if (signal?.aborted) return reject(signal.reason as Error);
+      const onAbort = () => {
+        cancel();
+        reject(signal?.reason as Error);
+      };
+      const cancel = this.schedule(ms, () => {
+        signal?.removeEventListener("abort", onAbort);
+        resolve();
+      });
+      signal?.addEventListener("abort", onAbort, { once: true });
+    });
+  }
+
+  schedule(ms: number, callback: () => void): () => void {
+    return startTimer(ms / this.#speed, callback);
+  }
+
+  deadline(ms: number, callback: () => void): () => void {
+    return startTimer(ms, callback);
+  }
+
+  /** Real time can't be held: the work is awaited as it is. */
+  hold<T>(work: Promise<T>): Promise<T> {
+    return work;
+  }
+}
+
+function startTimer(realMs: number, callback: () => void): () => void {
+  const timer = setTimeout(callback, Math.min(LONGEST_TIMER_MS, Math.max(0, realMs)));
+  return () => clearTimeout(timer);
+}
+
+function checkedSpeed(speed: number): number {
+  if (speed >= LOWEST_SPEED && speed <= HIGHEST_SPEED) return speed;
+  throw new RangeError(`a clock runs at ${LOWEST_SPEED} to ${HIGHEST_SPEED} times, got ${speed}`);
+}
