@@ -16,7 +16,7 @@ import { fitStepped } from "./stepped-fit";
 /** A point has arrived when its value lies this near to its expected end (as a fraction), or within half a display step. */
 export const ARRIVED_FRACTION = 0.005;
 /** How sure the fit must be of that. */
-const SURE = 0.98;
+const SURE = 0.95;
 /** Without a fit the display must stand for three times the longest interval between its steps. */
 const HOLD_FACTOR = 3;
 /** An expected end with a larger relative uncertainty is not worth showing. */

@@ -45,7 +45,12 @@ interface Solution {
 }
 
 const MOST_BINS = 64;
-const GRID = 20;
+const GRID = 16;
+const ROUNDS = 3;
+/** Time constants whose evidence is lower by this much in its logarithm are left out of the next round. */
+const NEGLIGIBLE = 8;
+/** The readings that will be averaged carry noise of their own; so many of them are counted on. */
+const READINGS_TO_COME = 4;
 /** A scatter expected before there are enough values to tell, as a fraction of the value, and its weight in values. */
 const USUAL_SCATTER = 0.0007;
 const USUAL_WEIGHT = 2;
@@ -66,13 +71,11 @@ export function fitSmooth(trace: SmoothTrace): SmoothFit | null {
   let taus = logSpaced(LEAST_SECONDS, MOST_SECONDS, GRID);
   let variance = usual;
   let outlooks: TimeConstantOutlook[] = [];
-  for (let round = 0; round < 3; round += 1) {
+  for (let round = 0; round < ROUNDS; round += 1) {
+    if (round > 0) taus = narrowed(outlooks);
     const solutions = taus.map((tau) => solve(bins, tau, variance));
-    variance = scatterVariance(solutions, trace.values.length, usual);
+    variance = scatterVariance(solutions, bins.length, usual);
     outlooks = solutions.map((solution) => outlookOf(solution, variance, trace));
-    const narrower = narrowed(outlooks);
-    if (!narrower) break;
-    taus = narrower;
   }
   const joined = joinOutlooks(outlooks);
   return joined && { ...joined, scatter: Math.sqrt(variance) };
@@ -127,7 +130,7 @@ function scatterVariance(solutions: readonly Solution[], count: number, usual: n
 function outlookOf(solution: Solution, variance: number, trace: SmoothTrace): TimeConstantOutlook {
   const { timeConstantSeconds, amplitude, lastDecay, inverse } = solution;
   const residual = -amplitude * lastDecay;
-  const deviation = lastDecay * Math.sqrt(variance * inverse.amplitudeAmplitude);
+  const deviation = Math.sqrt(variance * (lastDecay ** 2 * inverse.amplitudeAmplitude + 1 / READINGS_TO_COME));
   const { tolerance, plannedSeconds } = trace;
   return {
     timeConstantSeconds,
@@ -147,12 +150,11 @@ function probabilityWithin(centre: number, deviation: number, tolerance: number)
   return normalProbability((tolerance - centre) / deviation) - normalProbability((-tolerance - centre) / deviation);
 }
 
-/** A grid round the best time constant where the present one is too coarse for it; null where it is fine enough. */
-function narrowed(outlooks: readonly TimeConstantOutlook[]): number[] | null {
-  const best = outlooks.reduce((at, { logWeight }, index) => (logWeight > outlooks[at]!.logWeight ? index : at), 0);
-  const below = outlooks[Math.max(0, best - 1)]!;
-  const above = outlooks[Math.min(outlooks.length - 1, best + 1)]!;
-  const top = outlooks[best]!.logWeight;
-  const isFine = [below, above].some((outlook) => outlook !== outlooks[best] && top - outlook.logWeight < 2);
-  return isFine ? null : logSpaced(below.timeConstantSeconds, above.timeConstantSeconds, GRID);
+/** A finer grid over the time constants that the trace supports, one neighbour on each side included. */
+function narrowed(outlooks: readonly TimeConstantOutlook[]): number[] {
+  const highest = Math.max(...outlooks.map(({ logWeight }) => logWeight));
+  const isSupported = ({ logWeight }: TimeConstantOutlook) => logWeight > highest - NEGLIGIBLE;
+  const first = Math.max(0, outlooks.findIndex(isSupported) - 1);
+  const last = Math.min(outlooks.length - 1, outlooks.findLastIndex(isSupported) + 1);
+  return logSpaced(outlooks[first]!.timeConstantSeconds, outlooks[last]!.timeConstantSeconds, GRID);
 }

@@ -64,8 +64,8 @@ function outlookAt(trace: SteppedTrace, tau: number, slack: number): TimeConstan
   if (area <= 0) return impossible(tau);
   const [end, amplitude] = centroidOf(polygon, area);
   const arrived = clipAll(polygon, [
-    { a: 1, b: 0, c: 1 + trace.tolerance },
-    { a: -1, b: 0, c: trace.tolerance - 1 },
+    { a: 1, b: 0, c: 1 + trace.tolerance + slack },
+    { a: -1, b: 0, c: trace.tolerance + slack - 1 },
   ]);
   const residual = -amplitude * Math.exp(-(trace.nowSeconds - trace.fromSeconds) / tau);
   const ends = polygon.map((corner) => corner[0]);
