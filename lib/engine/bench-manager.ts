@@ -173,6 +173,11 @@ export class BenchManager {
     return active.sequence ? this.#interrupt(active, wish) : this.#endIdle(active, wish);
   }
 
+  /** Tells the journal of trouble that a repetition has cured. */
+  noteRecovery(recovery: { device: string; message: string; tries: number }): void {
+    if (this.#active?.sequence) this.#active.recorder.note({ type: "device.recovered", data: recovery });
+  }
+
   /** Ends the present attempt and leaves the run interrupted, resumable after the next start. */
   async shutDown(): Promise<void> {
     const active = this.#active;

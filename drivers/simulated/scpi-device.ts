@@ -1,0 +1,81 @@
+import type { DeviceRole } from "@/lib/schemas/bench";
+import { headerPattern, SCPI_ERRORS, ScpiFault, type ScpiErrorName } from "./scpi-dialect";
+
+/** Answers one line; undefined for a command without an answer. */
+type Act = (argument: string | undefined) => string | undefined;
+
+export interface SimulatedDevice {
+  readonly role: DeviceRole;
+  /** The answer to one line, if any. */
+  receiveLine(line: string): string | undefined;
+}
+
+const LONGEST_QUEUE = 16;
+
+/** IEEE 488.2 common commands, an error queue and a table of commands. */
+export class ScpiDevice implements SimulatedDevice {
+  readonly #commands: { pattern: RegExp; act: Act }[] = [];
+  readonly #errors: ScpiErrorName[] = [];
+  #eventStatus = 0;
+
+  /** `identity` is asked afresh each time, because another tester may be plugged in. */
+  constructor(
+    readonly role: DeviceRole,
+    identity: () => string,
+    commands: Readonly<Record<string, Act>>,
+  ) {
+    const common: Record<string, Act> = {
+      "*IDN?": identity,
+      "*RST": () => undefined,
+      "*CLS": () => this.#clear(),
+      "*OPC?": () => "1",
+      "*ESR?": () => this.#takeEventStatus(),
+      "*STB?": () => (this.#errors.length > 0 ? "4" : "0"),
+      "SYSTem:ERRor[:NEXT]?": () => this.#nextError(),
+    };
+    for (const [header, act] of Object.entries({ ...common, ...commands })) {
+      const pattern = header.startsWith("*")
+        ? new RegExp(`^${header.replace(/[*?]/gu, "\\$&")}$`, "iu")
+        : headerPattern(header);
+      this.#commands.push({ pattern, act });
+    }
+  }
+
+  receiveLine(line: string): string | undefined {
+    const [header = "", ...rest] = line.trim().split(/\s+/u);
+    if (header === "") return undefined;
+    const command = this.#commands.find(({ pattern }) => pattern.test(header));
+    try {
+      if (!command) throw new ScpiFault("undefinedHeader");
+      return command.act(rest.length > 0 ? rest.join(" ") : undefined);
+    } catch (error) {
+      if (!(error instanceof ScpiFault)) throw error;
+      this.push(error.error);
+      return undefined;
+    }
+  }
+
+  push(error: ScpiErrorName): void {
+    this.#eventStatus |= error === "hardwareError" ? 8 : error === "undefinedHeader" ? 32 : 16;
+    if (this.#errors.length >= LONGEST_QUEUE) this.#errors[LONGEST_QUEUE - 1] = "queueOverflow";
+    else this.#errors.push(error);
+  }
+
+  #nextError(): string {
+    const error = this.#errors.shift();
+    if (!error) return '0,"No error"';
+    const [code, text] = SCPI_ERRORS[error];
+    return `${code},"${text}"`;
+  }
+
+  #clear(): undefined {
+    this.#errors.length = 0;
+    this.#eventStatus = 0;
+  }
+
+  #takeEventStatus(): string {
+    const status = this.#eventStatus;
+    this.#eventStatus = 0;
+    return String(status);
+  }
+}
