@@ -1,7 +1,7 @@
 import { createStore, type StoreApi } from "zustand/vanilla";
 import { emptyRun, type RunState } from "@/lib/journal/run-state";
 import type { BenchSnapshot } from "@/lib/schemas/bench";
-import { followRun, type RunFollowing } from "./run-follower";
+import { followRun, type FollowSocket, type RunFollowing } from "./run-follower";
 import { createRunStore } from "./run-store";
 
 export interface BenchesView {
@@ -16,13 +16,40 @@ export function createBenchesStore(initial: BenchesView): BenchesStore {
   return createStore<BenchesView>()(() => initial);
 }
 
+interface SnapshotsFollowing {
+  socket: FollowSocket;
+  onWake(listener: () => void): () => void;
+  onAll(benches: BenchSnapshot[]): void;
+  onOne(bench: BenchSnapshot): void;
+}
+
+/** Hears of every bench: all at once on each connect and wake, then each that changes. Returns a function that ends it. */
+export function followSnapshots({ socket, onWake, onAll, onOne }: SnapshotsFollowing): () => void {
+  let isEnded = false;
+  const takeAll = (benches: BenchSnapshot[]) => {
+    if (!isEnded) onAll(benches);
+  };
+  const ask = () => {
+    if (socket.connected) socket.emit("benches:follow", takeAll);
+  };
+  socket.on("connect", ask);
+  socket.on("bench:changed", onOne);
+  const stopWaking = onWake(ask);
+  ask();
+  return () => {
+    isEnded = true;
+    socket.off("connect", ask);
+    socket.off("bench:changed", onOne);
+    stopWaking();
+  };
+}
+
 export type BenchesFollowing = Omit<RunFollowing, "runId" | "store"> & { store: BenchesStore };
 
 /** Keeps all benches and their active runs up with the server. Returns a function that ends it. */
 export function followBenches(following: BenchesFollowing): () => void {
   const { store, socket, onWake } = following;
   const endings = new Map<string, () => void>();
-  let isEnded = false;
 
   const followActive = () => {
     const active = new Set(store.getState().benches.flatMap((bench) => bench.activeRunId ?? []));
@@ -34,24 +61,16 @@ export function followBenches(following: BenchesFollowing): () => void {
     for (const runId of active) if (!endings.has(runId)) endings.set(runId, followActiveRun(following, runId));
   };
   const takeAll = (benches: BenchSnapshot[]) => {
-    if (isEnded) return;
     store.setState({ benches });
     followActive();
   };
   const takeOne = (snapshot: BenchSnapshot) =>
     takeAll(store.getState().benches.map((bench) => (bench.id === snapshot.id ? snapshot : bench)));
-  const ask = () => void (socket.connected && socket.emit("benches:follow", takeAll));
 
-  socket.on("connect", ask);
-  socket.on("bench:changed", takeOne);
-  const stopWaking = onWake(ask);
   followActive();
-  ask();
+  const stopSnapshots = followSnapshots({ socket, onWake, onAll: takeAll, onOne: takeOne });
   return () => {
-    isEnded = true;
-    socket.off("connect", ask);
-    socket.off("bench:changed", takeOne);
-    stopWaking();
+    stopSnapshots();
     for (const end of endings.values()) end();
   };
 }
@@ -69,12 +88,19 @@ function followActiveRun(following: BenchesFollowing, runId: string): () => void
     publish(initial);
     const unsubscribe = runStore.subscribe(({ run }) => publish(run));
     const unfollow = followRun({ ...following, runId, store: runStore });
-    end = () => (unsubscribe(), unfollow());
+    end = () => {
+      unsubscribe();
+      unfollow();
+    };
   };
 
   const known = store.getState().runs[runId];
   if (known) begin(known);
-  else void fetchState(runId).then(begin, () => begin(emptyRun));
+  else
+    void fetchState(runId).then(begin, () => {
+      // Following from the very first record tells the same, only later.
+      begin(emptyRun);
+    });
   return () => {
     isEnded = true;
     end?.();
