@@ -11,7 +11,7 @@ export interface BenchDevices {
   tester: Tester;
   meter: Meter;
   roomSensor: RoomSensor;
-  /** Opens every port that is not open. Throws DriverError `port-lost` for the first that can't be. */
+  /** Opens every port that is not open; one that can't be does not keep the others closed. Throws DriverError `port-lost` for the first of those. */
   reopen(): Promise<void>;
   /** Calls back when a port is lost; returns a function that stops it. */
   onLost(listener: (error: DriverError) => void): () => void;

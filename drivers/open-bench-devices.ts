@@ -10,16 +10,18 @@ import { ScpiTester } from "./scpi/scpi-tester";
 import { LinePort } from "./transport/line-port";
 import type { PortBinding } from "./transport/port-binding";
 
+const SIMULATED_PATH = "sim:";
+
 export interface OpenBenchDevicesOptions {
   bench: Bench;
   clock: Clock;
   checkRating: (positions: readonly number[], highestVolts: Volts) => string | null;
   onRecovered: (recovery: Recovery) => void;
-  /** The simulated bench's binding; the machine's own ports without it. */
+  /** Where paths that begin with `sim:` lead: the simulated bench's binding. Other paths are the machine's own. */
   binding?: PortBinding | undefined;
 }
 
-/** Makes the devices of a bench; `reopen` opens their ports. Throws RangeError when the bench lacks a role. */
+/** Makes the devices of a bench; `reopen` opens their ports. Throws RangeError when the bench lacks a role or a simulation. */
 export function openBenchDevices({
   bench,
   clock,
@@ -31,7 +33,10 @@ export function openBenchDevices({
   const portOf = (role: DeviceRole, device: string) => {
     const place = bench.devices.find((entry) => entry.role === role);
     if (!place) throw new RangeError(`${bench.name} has no ${device}`);
-    const port = new LinePort({ device, path: place.port, baudRate: place.baudRate, clock, binding });
+    const isSimulated = place.port.startsWith(SIMULATED_PATH);
+    if (isSimulated && !binding) throw new RangeError(`${place.port} of ${bench.name} needs a simulated bench`);
+    const { port: path, baudRate } = place;
+    const port = new LinePort({ device, path, baudRate, clock, binding: isSimulated ? binding : undefined });
     ports.set(role, port);
     return port;
   };
@@ -51,7 +56,9 @@ export function openBenchDevices({
     meter,
     roomSensor,
     reopen: async () => {
-      for (const port of all) await port.open();
+      const opened = await Promise.allSettled(all.map((port) => port.open()));
+      const failed = opened.find((outcome) => outcome.status === "rejected");
+      if (failed) throw failed.reason;
     },
     onLost: (listener) => {
       const stops = all.map((port) => port.onLost(listener));

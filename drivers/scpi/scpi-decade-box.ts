@@ -6,6 +6,8 @@ import { DriverError } from "../driver-error";
 import type { LinePort } from "../transport/line-port";
 import { ScpiInstrument, type Recovery } from "./scpi-instrument";
 
+const POSITIONS = /^\d{1,2}(?:,\d{1,2})*$/u;
+
 export interface ScpiDecadeBoxOptions {
   port: LinePort;
   record: DecadeBoxRecord;
@@ -16,6 +18,8 @@ export interface ScpiDecadeBoxOptions {
 
 /** A decade box: `SOUR:RES:POS 1,0,…` sets the dials from the heaviest decade on, `SOUR:RES:POS?` reads them back. */
 export class ScpiDecadeBox extends ScpiInstrument implements DecadeBox {
+  #provenOpening = 0;
+
   constructor(private readonly options: ScpiDecadeBoxOptions) {
     super(options.port, options.onRecovered);
   }
@@ -28,16 +32,11 @@ export class ScpiDecadeBox extends ScpiInstrument implements DecadeBox {
   }
 
   async readDials(): Promise<number[]> {
+    const count = this.options.record.decades.length;
     return this.query("SOUR:RES:POS?", (answer) => {
-      const positions = answer.split(",").map(Number);
-      if (positions.length === this.options.record.decades.length && positions.every(Number.isInteger))
-        return positions;
-      throw new DriverError(
-        "garbled-reply",
-        this.name,
-        `The ${this.name} reads its dials back as “${answer}”.`,
-        "Check its cable, then resume.",
-      );
+      const positions = POSITIONS.test(answer) ? answer.split(",").map(Number) : [];
+      if (positions.length === count) return positions;
+      throw this.senseless("SOUR:RES:POS?", answer, `list of ${count} dial positions`);
     });
   }
 
@@ -49,14 +48,36 @@ export class ScpiDecadeBox extends ScpiInstrument implements DecadeBox {
   }
 
   async #move(positions: readonly number[], permit: DischargePermit): Promise<void> {
-    if (!permit.isValid) {
-      throw this.#refuse("the terminals are not proven to be discharged", "Let the bench reach its safe state first.");
-    }
-    await this.set(`SOUR:RES:POS ${positions.join(",")}`);
+    this.#requirePermit(permit);
+    await this.#proveIdentity();
+    // Asked again at the last moment: the permit may have ended while the line was waiting for its turn.
+    await this.set(`SOUR:RES:POS ${positions.join(",")}`, () => this.#requirePermit(permit));
     const found = await this.readDials();
     if (found.some((position, index) => position !== positions[index])) {
       throw this.wrongReadBack("dials", positions.join(" "), found.join(" "));
     }
+  }
+
+  #requirePermit(permit: DischargePermit): void {
+    if (permit.isValid) return;
+    throw this.#refuse("the terminals are not proven to be discharged", "Let the bench reach its safe state first.");
+  }
+
+  /** Ratings and corrections belong to one box: after each opening of the port, that box must be the one that answers. */
+  async #proveIdentity(): Promise<void> {
+    const { openings } = this.port;
+    if (this.#provenOpening === openings) return;
+    const { model, serialNumber } = await this.identify();
+    const { record } = this.options;
+    if (serialNumber !== record.serialNumber) {
+      throw new DriverError(
+        "wrong-identity",
+        this.name,
+        `The ${this.name} says that it is ${model} ${serialNumber}; this bench's standard is ${record.model} ${record.serialNumber}.`,
+        "Connect the bench's own box, or have the register say which box stands on this bench.",
+      );
+    }
+    this.#provenOpening = openings;
   }
 
   #refuse(reason: string, cure: string): DriverError {

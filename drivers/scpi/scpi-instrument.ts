@@ -1,5 +1,5 @@
 import type { Device, DeviceIdentity } from "../device";
-import { DriverError, isWorthRepeating } from "../driver-error";
+import { DriverError, isDriverError, isWorthRepeating } from "../driver-error";
 import type { LinePort } from "../transport/line-port";
 
 export interface Recovery {
@@ -12,6 +12,9 @@ export interface Recovery {
 const MOST_TRIES = 3;
 const NUMBER = /^[+-]?\d+(?:\.\d+)?(?:E[+-]?\d+)?$/iu;
 const OVER_RANGE = 9.9e37;
+const QUEUED_ERROR = /^[+-]?\d+,".*"$/u;
+const NO_ERROR = /^[+-]?0,/u;
+const IDENTITY_FIELDS = 4;
 
 /** A device that speaks SCPI over one port: questions repeated where harmless, settings checked in its error queue. */
 export abstract class ScpiInstrument implements Device {
@@ -25,10 +28,12 @@ export abstract class ScpiInstrument implements Device {
   }
 
   async identify(): Promise<DeviceIdentity> {
-    const [maker = "", model = "", serialNumber = "", firmware = ""] = (
-      await this.query("*IDN?", (text) => text)
-    ).split(",");
-    return { maker, model, serialNumber, firmware };
+    return this.query("*IDN?", (answer) => {
+      const fields = answer.split(",").map((field) => field.trim());
+      if (fields.length !== IDENTITY_FIELDS) throw this.senseless("*IDN?", answer, "identity of four fields");
+      const [maker = "", model = "", serialNumber = "", firmware = ""] = fields;
+      return { maker, model, serialNumber, firmware };
+    });
   }
 
   close(): Promise<void> {
@@ -48,7 +53,10 @@ export abstract class ScpiInstrument implements Device {
           });
         return value;
       } catch (error) {
-        if (!isWorthRepeating(error) || tries >= MOST_TRIES) throw error;
+        if (!isWorthRepeating(error)) throw error;
+        // A whole line that makes no sense may be the answer to another question.
+        if (isDriverError(error) && error.code === "garbled-reply") this.port.distrust();
+        if (tries >= MOST_TRIES) throw error;
       }
     }
   }
@@ -65,11 +73,14 @@ export abstract class ScpiInstrument implements Device {
     });
   }
 
-  /** Sends a setting and reads the error queue. Throws DriverError `device-error` when the device refused it. */
-  protected async set(line: string): Promise<void> {
-    await this.port.send(line);
-    const answer = await this.query("SYST:ERR?", (text) => text);
-    if (/^[+-]?0,/u.test(answer)) return;
+  /**
+   * Sends a setting and reads the error queue. `mayGo` is called right before the line goes and stops it by throwing.
+   * Throws DriverError `device-error` when the device refused it.
+   */
+  protected async set(line: string, mayGo?: () => void): Promise<void> {
+    await this.port.send(line, mayGo);
+    const answer = await this.query("SYST:ERR?", (text) => this.#queuedError(text));
+    if (NO_ERROR.test(answer)) return;
     throw new DriverError(
       "device-error",
       this.name,
@@ -88,14 +99,20 @@ export abstract class ScpiInstrument implements Device {
     );
   }
 
+  /** An answer in plain characters that is none to the question. */
+  protected senseless(line: string, answer: string, wanted: string): DriverError {
+    const message = `The ${this.name} answered “${line}” with “${answer}”, which is no ${wanted}.`;
+    const cure = "Check its cable and the speed of its port, then resume.";
+    return new DriverError("garbled-reply", this.name, message, cure);
+  }
+
   #number(line: string, answer: string): number {
     if (NUMBER.test(answer)) return Number(answer);
-    const message = `The ${this.name} answered “${line}” with “${answer}”, which is no number.`;
-    throw new DriverError(
-      "garbled-reply",
-      this.name,
-      message,
-      "Check its cable and the speed of its port, then resume.",
-    );
+    throw this.senseless(line, answer, "number");
+  }
+
+  #queuedError(answer: string): string {
+    if (QUEUED_ERROR.test(answer)) return answer;
+    throw this.senseless("SYST:ERR?", answer, "entry of an error queue");
   }
 }

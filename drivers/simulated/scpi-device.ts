@@ -11,6 +11,8 @@ export interface SimulatedDevice {
 }
 
 const LONGEST_QUEUE = 16;
+/** Bits of the event status register for errors of −1xx (command), −2xx (execution), −3xx (device) and −4xx (query). */
+const EVENT_STATUS_BITS: Readonly<Record<number, number>> = { [-1]: 32, [-2]: 16, [-3]: 8, [-4]: 4 };
 
 /** IEEE 488.2 common commands, an error queue and a table of commands. */
 export class ScpiDevice implements SimulatedDevice {
@@ -56,7 +58,8 @@ export class ScpiDevice implements SimulatedDevice {
   }
 
   push(error: ScpiErrorName): void {
-    this.#eventStatus |= error === "hardwareError" ? 8 : error === "undefinedHeader" ? 32 : 16;
+    const errorClass = Math.trunc(SCPI_ERRORS[error][0] / 100);
+    this.#eventStatus |= EVENT_STATUS_BITS[errorClass] ?? 0;
     if (this.#errors.length >= LONGEST_QUEUE) this.#errors[LONGEST_QUEUE - 1] = "queueOverflow";
     else this.#errors.push(error);
   }

@@ -77,6 +77,7 @@ export class SimulatedPort implements BindingPort {
   #received = "";
   #outgoing = Buffer.alloc(0);
   #pending: PendingRead | null = null;
+  #busyUntilMs = 0;
   readonly #cancels = new Set<() => void>();
 
   constructor(
@@ -142,7 +143,10 @@ export class SimulatedPort implements BindingPort {
   #answer(line: string): void {
     const answer = this.socket.answer(line);
     if (!answer) return;
-    const cancel = this.clock.schedule(ANSWER_MS + answer.lateMs, () => {
+    // A device works on one line after the other, so a late answer holds up the next one.
+    const nowMs = this.clock.monotonicMs();
+    this.#busyUntilMs = Math.max(this.#busyUntilMs, nowMs) + ANSWER_MS + answer.lateMs;
+    const cancel = this.clock.schedule(this.#busyUntilMs - nowMs, () => {
       this.#cancels.delete(cancel);
       this.inject(`${answer.text}\n`);
     });

@@ -53,6 +53,10 @@ export function simulatedTester(circuit: SimulatedCircuit, unit: () => Unit | nu
       circuit.selectVoltage(wanted);
       return undefined;
     },
+    "*RST": () => {
+      circuit.switchOutput(false);
+      return undefined;
+    },
     "SOURce:VOLTage[:LEVel]?": () => scientific(circuit.state.testVolts, 4),
     "OUTPut[:STATe]": (argument) => {
       circuit.switchOutput(parseBoolean(argument));
