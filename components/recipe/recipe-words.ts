@@ -4,7 +4,7 @@ import { engineeringParts, formatDuration, formatTestVolts, THIN_SPACE } from "@
 
 /** A nominal resistance as short as it can be told: `100 kΩ`, `1.5 GΩ`. */
 export function shortOhms(ohms: number): string {
-  const { number, unit } = engineeringParts(ohms, "Ω", { digits: 6 });
+  const { number, unit } = engineeringParts(ohms, "Ω", { digits: 12 });
   return `${number.includes(".") ? number.replace(/\.?0+$/u, "") : number}${THIN_SPACE}${unit}`;
 }
 
