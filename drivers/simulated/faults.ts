@@ -46,3 +46,19 @@ export function slowBy(lateMs: number, count: number): LineFault {
 export function answering(pattern: RegExp, text: string, count: number): LineFault {
   return counted(count, (line) => (pattern.test(line) ? { text, lateMs: 0 } : null));
 }
+
+/** Lets `lines` lines through and then pulls the plug. */
+export function unpluggedAfter(lines: number, unplug: () => void): LineFault {
+  let left = lines;
+  return {
+    get isSpent() {
+      return left <= 0;
+    },
+    meet() {
+      left -= 1;
+      if (left > 0) return null;
+      unplug();
+      return { text: null, lateMs: 0 };
+    },
+  };
+}

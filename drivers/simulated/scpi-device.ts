@@ -1,5 +1,5 @@
 import type { DeviceRole } from "@/lib/schemas/bench";
-import { headerPattern, SCPI_ERRORS, ScpiFault, type ScpiErrorName } from "./scpi-dialect";
+import { headerPattern, parseNumber, SCPI_ERRORS, ScpiFault, type ScpiErrorName } from "./scpi-dialect";
 
 /** Answers one line; undefined for a command without an answer. */
 type Act = (argument: string | undefined) => string | undefined;
@@ -11,6 +11,7 @@ export interface SimulatedDevice {
 }
 
 const LONGEST_QUEUE = 16;
+const HIGHEST_MASK = 255;
 /** Bits of the event status register for errors of −1xx (command), −2xx (execution), −3xx (device) and −4xx (query). */
 const EVENT_STATUS_BITS: Readonly<Record<number, number>> = { [-1]: 32, [-2]: 16, [-3]: 8, [-4]: 4 };
 
@@ -19,6 +20,7 @@ export class ScpiDevice implements SimulatedDevice {
   readonly #commands: { pattern: RegExp; act: Act }[] = [];
   readonly #errors: ScpiErrorName[] = [];
   #eventStatus = 0;
+  #eventEnable = 0;
 
   /** `identity` is asked afresh each time, because another tester may be plugged in. */
   constructor(
@@ -32,7 +34,9 @@ export class ScpiDevice implements SimulatedDevice {
       "*CLS": () => this.#clear(),
       "*OPC?": () => "1",
       "*ESR?": () => this.#takeEventStatus(),
-      "*STB?": () => (this.#errors.length > 0 ? "4" : "0"),
+      "*ESE": (argument) => this.#setEventEnable(argument),
+      "*ESE?": () => String(this.#eventEnable),
+      "*STB?": () => String(this.#statusByte()),
       "SYSTem:ERRor[:NEXT]?": () => this.#nextError(),
     };
     for (const [header, act] of Object.entries({ ...common, ...commands })) {
@@ -74,6 +78,18 @@ export class ScpiDevice implements SimulatedDevice {
   #clear(): undefined {
     this.#errors.length = 0;
     this.#eventStatus = 0;
+  }
+
+  #setEventEnable(argument: string | undefined): undefined {
+    const mask = parseNumber(argument, "");
+    if (!Number.isInteger(mask) || mask < 0 || mask > HIGHEST_MASK) throw new ScpiFault("dataOutOfRange");
+    this.#eventEnable = mask;
+  }
+
+  /** Bit 2: the error queue holds something; bit 5: an enabled event has happened. */
+  #statusByte(): number {
+    const hasEvent = (this.#eventStatus & this.#eventEnable) !== 0;
+    return (this.#errors.length > 0 ? 4 : 0) + (hasEvent ? 32 : 0);
   }
 
   #takeEventStatus(): string {

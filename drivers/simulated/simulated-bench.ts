@@ -35,7 +35,7 @@ const KEPT_SETTINGS = 200;
 export class SimulatedBench {
   readonly circuit: SimulatedCircuit;
   readonly binding: SimulatedBinding;
-  /** Settings received since the bench was opened, oldest first; queries and the clearing of errors are left out. */
+  /** Settings received since the bench was opened, oldest first; queries and the setting of status registers are left out. */
   readonly settings: ReceivedSetting[] = [];
   readonly #sockets = new Map<string, SimulatedSocket>();
   readonly #earlierViolations: string[] = [];
@@ -96,7 +96,7 @@ export class SimulatedBench {
   }
 
   #received({ role }: SimulatedDevice, line: string): void {
-    if (line.includes("?") || line === "*CLS") return;
+    if (line.includes("?") || /^\*(CLS|ESE)/iu.test(line)) return;
     this.settings.push({ role, line, atMs: this.#options.clock.nowMs() });
     if (this.settings.length > KEPT_SETTINGS) this.settings.splice(KEPT_SETTINGS / 2, 1);
     this.#remember();

@@ -1,11 +1,9 @@
-import { ReadlineParser } from "@serialport/parser-readline";
-import type { SerialPort } from "serialport";
 import type { Clock } from "@/lib/engine/clock";
 import type { DriverError } from "../driver-error";
-import { ByteCap } from "./byte-cap";
 import { LineTrace, type TracedLine } from "./line-trace";
-import { makePort, type PortBinding } from "./port-binding";
+import type { PortBinding } from "./port-binding";
 import { PortErrors } from "./port-errors";
+import { SerialLine } from "./serial-line";
 
 export interface LinePortOptions {
   /** For messages: `tester`. */
@@ -19,19 +17,15 @@ export interface LinePortOptions {
   answerMs?: number;
 }
 
-const LONGEST_LINE_BYTES = 256;
 const ANSWER_MS = 1000;
-const WRITE_MS = 1000;
 /** A line is quiet when nothing has come for so long. */
 const QUIET_MS = 50;
 /** A line that is not quiet after so long is not one that can be asked. */
 const LONGEST_NOISE_MS = 2000;
-/** Answers to an identity query that are thrown away before the device counts as out of step. */
+/** Late answers that are thrown away before the device counts as one that can't be asked. */
 const MOST_STALE_LINES = 8;
-const CLEAR_STATUS = "*CLS";
-const IDENTITY_QUERY = "*IDN?";
-/** Four fields, comma-separated (IEEE 488.2, 10.14). */
-const IDENTITY = /^[^,]+,[^,]+,[^,]*,[^,]*$/u;
+/** Numbers for the event status enable register that no other answer looks like; the register takes 0 to 255. */
+const TOKENS = { first: 100, last: 255 } as const;
 const TORN = /^$|[^\x20-\x7e]/u;
 
 interface Exchange {
@@ -42,28 +36,37 @@ interface Exchange {
 /**
  * One line-oriented port: one exchange at a time, each with a deadline of its own.
  *
- * After a time-out, a torn answer or a cancelled exchange a late answer may still come, so the next question waits
- * until the line is quiet and an identity query has been answered: no answer is ever taken for the next question's.
+ * After a time-out, a torn answer or a cancelled exchange a late answer may still come. So the next question waits until
+ * the line is quiet and the device has given back a fresh number, which it keeps in its event status enable register
+ * (`*ESE`, which IEEE 488.2 asks of every device): no answer is ever taken for the next question's.
  */
 export class LinePort {
-  readonly #options: LinePortOptions;
+  readonly #clock: Clock;
+  readonly #answerMs: number;
   readonly #errors: PortErrors;
   readonly #trace: LineTrace;
+  readonly #line: SerialLine;
   readonly #lostListeners = new Set<(error: DriverError) => void>();
-  #port: SerialPort | null = null;
-  #opening: Promise<void> | null = null;
-  #closing: Promise<void> = Promise.resolve();
-  #openings = 0;
   #exchange: Exchange | null = null;
   #queue: Promise<unknown> = Promise.resolve();
   #urgentLines = 0;
   #isOutOfStep = false;
-  #lastByteAtMs = -Infinity;
+  #token: number = TOKENS.first;
 
-  constructor(options: LinePortOptions) {
-    this.#options = options;
-    this.#errors = new PortErrors(options.device, options.path);
-    this.#trace = new LineTrace(options.clock);
+  constructor({ device, path, baudRate, clock, binding, answerMs = ANSWER_MS }: LinePortOptions) {
+    this.#clock = clock;
+    this.#answerMs = answerMs;
+    this.#errors = new PortErrors(device, path);
+    this.#trace = new LineTrace(clock);
+    this.#line = new SerialLine({
+      path,
+      baudRate,
+      clock,
+      binding,
+      errors: this.#errors,
+      onLine: (line) => this.#receive(line),
+      onLost: (error) => this.#lose(error),
+    });
   }
 
   get name(): string {
@@ -71,12 +74,12 @@ export class LinePort {
   }
 
   get isOpen(): boolean {
-    return this.#port?.isOpen ?? false;
+    return this.#line.isOpen;
   }
 
   /** How often the port has been opened: what was known of the device before the last time may be wrong now. */
   get openings(): number {
-    return this.#openings;
+    return this.#line.openings;
   }
 
   /** The newest lines sent and received. */
@@ -90,20 +93,17 @@ export class LinePort {
   }
 
   /** Opens the port unless it is open. Throws DriverError `port-lost`. */
-  open(): Promise<void> {
-    if (this.isOpen) return Promise.resolve();
-    this.#opening ??= this.#open().finally(() => (this.#opening = null));
-    return this.#opening;
+  async open(): Promise<void> {
+    if (this.isOpen) return;
+    await this.#line.open();
+    // Opening may restart a device or meet the tail of an old answer.
+    this.#isOutOfStep = true;
   }
 
   /** Closes the port; the exchange under way fails. Safe to call twice. */
   async close(): Promise<void> {
-    await this.#opening?.catch(() => undefined);
-    const port = this.#port;
-    this.#port = null;
+    await this.#line.close();
     this.#exchange?.fail(this.#errors.lost(null));
-    if (port) this.#release(port);
-    await this.#closing;
   }
 
   /**
@@ -131,7 +131,7 @@ export class LinePort {
   send(line: string, mayGo: () => void = () => undefined): Promise<void> {
     const urgentLines = this.#urgentLines;
     return this.#inTurn(async () => {
-      if (urgentLines !== this.#urgentLines) throw this.#errors.gaveWay(line, "an urgent line");
+      if (urgentLines !== this.#urgentLines) throw this.#errors.gaveWay(line);
       mayGo();
       await this.#write(line);
     });
@@ -147,7 +147,7 @@ export class LinePort {
     const written = this.#write(line);
     if (cancelled) {
       this.#isOutOfStep = true;
-      cancelled.fail(this.#errors.gaveWay("the question under way", line));
+      cancelled.fail(this.#errors.gaveWay("the question under way"));
     }
     await written;
   }
@@ -157,76 +157,58 @@ export class LinePort {
     this.#isOutOfStep = true;
   }
 
-  async #open(): Promise<void> {
-    await this.#closing;
-    const { path, baudRate, binding } = this.#options;
-    const port = makePort({ path, baudRate, binding });
-    port.on("error", (error: Error) => this.#lose(port, error));
-    port.on("close", (error: Error | null) => this.#lose(port, error));
-    port.on("data", () => (this.#lastByteAtMs = this.#options.clock.monotonicMs()));
-    port
-      .pipe(new ByteCap(LONGEST_LINE_BYTES))
-      .pipe(new ReadlineParser({ delimiter: "\n", encoding: "latin1" }))
-      .on("data", (line: string) => this.#receive(line.replace(/\r$/u, "")));
-    await new Promise<void>((resolve, reject) =>
-      port.open((error) => (error ? reject(this.#errors.lost(error)) : resolve())),
-    );
-    this.#port = port;
-    this.#openings += 1;
-    // Opening may restart a device or meet the tail of an old answer.
-    this.#isOutOfStep = true;
-  }
-
   #inTurn<T>(act: () => Promise<T>): Promise<T> {
     const done = this.#queue.then(act);
     this.#queue = done.catch(() => undefined);
     return done;
   }
 
-  /** Waits until the line is quiet, then asks who is there and throws away whatever is not that answer. */
+  /** Waits until the line is quiet, then has the device repeat a fresh number and throws away whatever comes before it. */
   async #getInStep(): Promise<void> {
     await this.#untilQuiet();
+    this.#token = this.#token < TOKENS.last ? this.#token + 1 : TOKENS.first;
     // Errors of lines that were torn on their way are nobody's now.
-    await this.#write(CLEAR_STATUS);
+    await this.#write("*CLS");
+    await this.#write(`*ESE ${this.#token}`);
     let stale = 0;
-    await this.#exchangeOnce(IDENTITY_QUERY, (answer) => IDENTITY.test(answer) || ++stale > MOST_STALE_LINES);
-    if (stale > MOST_STALE_LINES) throw this.#errors.garbled(IDENTITY_QUERY, "lines that are no identity");
-    // The answer to an earlier identity query may have stood in for this one's, which then still comes.
-    await this.#untilQuiet();
+    const isToken = (answer: string) => Number(answer) === this.#token;
+    await this.#exchangeOnce("*ESE?", (answer) => isToken(answer) || ++stale > MOST_STALE_LINES);
+    if (stale > MOST_STALE_LINES) throw this.#errors.garbled("*ESE?", "answers to other questions");
     this.#isOutOfStep = false;
   }
 
   async #untilQuiet(): Promise<void> {
-    const { clock } = this.#options;
+    const clock = this.#clock;
     const beganMs = clock.monotonicMs();
     do {
       await clock.sleep(QUIET_MS);
       if (clock.monotonicMs() - beganMs > LONGEST_NOISE_MS) throw this.#errors.neverQuiet(LONGEST_NOISE_MS);
-    } while (clock.monotonicMs() - this.#lastByteAtMs < QUIET_MS);
+    } while (clock.monotonicMs() - this.#line.lastByteAtMs < QUIET_MS);
   }
 
-  /** One question and the first line that `isAnswer` accepts. */
+  /** One question and the first whole line that `isAnswer` accepts. */
   #exchangeOnce(line: string, isAnswer: (answer: string) => boolean): Promise<string> {
     return new Promise((resolve, reject) => {
+      const cancelDeadline = this.#clock.deadline(this.#answerMs, () => {
+        this.#isOutOfStep = true;
+        fail(this.#errors.noAnswer(line, this.#answerMs));
+      });
+      const take = (answer: string) => {
+        if (TORN.test(answer)) return takeTorn(answer);
+        if (!isAnswer(answer)) return;
+        end();
+        resolve(answer);
+      };
+      const takeTorn = (answer: string) => {
+        // On the way back into step, torn lines are remains of what was.
+        if (this.#isOutOfStep) return;
+        this.#isOutOfStep = true;
+        fail(this.#errors.garbled(line, JSON.stringify(answer.slice(0, 40))));
+      };
       const fail = (error: DriverError) => {
         end();
         reject(error);
       };
-      const take = (answer: string) => {
-        const isTorn = TORN.test(answer);
-        if (isTorn ? this.#isOutOfStep : !isAnswer(answer)) return;
-        if (isTorn) return failOutOfStep(this.#errors.garbled(line, JSON.stringify(answer.slice(0, 40))));
-        end();
-        resolve(answer);
-      };
-      const failOutOfStep = (error: DriverError) => {
-        this.#isOutOfStep = true;
-        fail(error);
-      };
-      const answerMs = this.#options.answerMs ?? ANSWER_MS;
-      const cancelDeadline = this.#options.clock.deadline(answerMs, () =>
-        failOutOfStep(this.#errors.noAnswer(line, answerMs)),
-      );
       const exchange: Exchange = { take, fail };
       const end = () => {
         cancelDeadline();
@@ -238,20 +220,8 @@ export class LinePort {
   }
 
   #write(line: string): Promise<void> {
-    return new Promise((resolve, reject) => {
-      const port = this.#port;
-      if (!port?.isOpen) return reject(this.#errors.lost(null));
-      this.#trace.sent(line);
-      const cancelDeadline = this.#options.clock.deadline(WRITE_MS, () =>
-        reject(this.#errors.notTaken(line, WRITE_MS)),
-      );
-      port.write(`${line}\n`, "latin1", (error) => {
-        cancelDeadline();
-        if (!error) return resolve();
-        this.#lose(port, error);
-        reject(this.#errors.lost(error));
-      });
-    });
+    if (this.isOpen) this.#trace.sent(line);
+    return this.#line.write(line);
   }
 
   #receive(line: string): void {
@@ -259,23 +229,8 @@ export class LinePort {
     this.#exchange?.take(line);
   }
 
-  #lose(port: SerialPort, cause: Error | null): void {
-    if (this.#port !== port) return;
-    this.#port = null;
-    this.#release(port);
-    const error = this.#errors.lost(cause);
+  #lose(error: DriverError): void {
     this.#exchange?.fail(error);
     for (const listener of this.#lostListeners) listener(error);
-  }
-
-  /** Lets the machine's port go; the next opening waits for it, else it would find the port locked. */
-  #release(port: SerialPort): void {
-    if (port.isOpen) this.#closing = new Promise((resolve) => port.close(() => resolve()));
-    else if (port.closing) {
-      this.#closing = new Promise((resolve) => {
-        port.once("close", () => resolve());
-        port.once("error", () => resolve());
-      });
-    }
   }
 }

@@ -44,8 +44,8 @@ export class PortErrors {
     return new DriverError("garbled-reply", this.name, message, cure);
   }
 
-  gaveWay(line: string, urgentLine: string): DriverError {
-    const message = `“${line}” was not sent to the ${this.name}: it gave way to “${urgentLine}”.`;
+  gaveWay(line: string): DriverError {
+    const message = `“${line}” was held back from the ${this.name}: an urgent line went first.`;
     return new DriverError("refused", this.name, message, "Look at the bench, then resume.");
   }
 }

@@ -5,11 +5,18 @@ const HIGHEST_SPEED = 1000;
 /** setTimeout takes no longer delay than this. */
 const LONGEST_TIMER_MS = 2 ** 31 - 1;
 
+interface Wake {
+  atMs: number;
+  callback: () => void;
+  timer: NodeJS.Timeout | undefined;
+}
+
 /** The machine's own time, 1 to 1000 times as fast. Hardware runs at 1. */
 export class ScaledClock implements Clock {
   #speed: number;
   #realOrigin = performance.now();
   #benchOrigin = 0;
+  readonly #wakes = new Set<Wake>();
 
   /** Throws RangeError for a speed outside 1 to 1000. */
   constructor(speed = 1) {
@@ -26,6 +33,7 @@ export class ScaledClock implements Clock {
     this.#benchOrigin = this.monotonicMs();
     this.#realOrigin = performance.now();
     this.#speed = checked;
+    for (const wake of this.#wakes) this.#arm(wake);
   }
 
   nowMs(): number {
@@ -52,22 +60,39 @@ export class ScaledClock implements Clock {
   }
 
   schedule(ms: number, callback: () => void): () => void {
-    return startTimer(ms / this.#speed, callback);
+    const wake: Wake = { atMs: this.monotonicMs() + ms, callback, timer: undefined };
+    this.#wakes.add(wake);
+    this.#arm(wake);
+    return () => this.#drop(wake);
   }
 
   deadline(ms: number, callback: () => void): () => void {
-    return startTimer(ms, callback);
+    const timer = setTimeout(callback, Math.min(LONGEST_TIMER_MS, Math.max(0, ms)));
+    return () => clearTimeout(timer);
   }
 
   /** Real time can't be held: the work is awaited as it is. */
   hold<T>(work: Promise<T>): Promise<T> {
     return work;
   }
-}
 
-function startTimer(realMs: number, callback: () => void): () => void {
-  const timer = setTimeout(callback, Math.min(LONGEST_TIMER_MS, Math.max(0, realMs)));
-  return () => clearTimeout(timer);
+  /** A timer may be early by part of a millisecond, which is long in fast time: what is not due is armed again. */
+  #arm(wake: Wake): void {
+    clearTimeout(wake.timer);
+    const realMs = Math.max(0, wake.atMs - this.monotonicMs()) / this.#speed;
+    wake.timer = setTimeout(() => this.#ring(wake), Math.min(LONGEST_TIMER_MS, realMs));
+  }
+
+  #ring(wake: Wake): void {
+    if (this.monotonicMs() < wake.atMs) return this.#arm(wake);
+    this.#wakes.delete(wake);
+    wake.callback();
+  }
+
+  #drop(wake: Wake): void {
+    clearTimeout(wake.timer);
+    this.#wakes.delete(wake);
+  }
 }
 
 function checkedSpeed(speed: number): number {
