@@ -78,6 +78,7 @@ export class SerialLine {
 
   async #open(): Promise<void> {
     // A port that is still being let go would be found locked.
+    if (this.#port) this.#release(this.#port);
     await this.#closing;
     const { path, baudRate, binding, clock, errors, onLine } = this.#options;
     const port = makePort({ path, baudRate, binding });

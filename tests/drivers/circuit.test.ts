@@ -65,6 +65,18 @@ describe("the circuit's indication", () => {
   });
 });
 
+describe("the tester's filter", () => {
+  it("adds its own time constant to that of resistance and capacitance", () => {
+    const { circuit } = circuitWith({
+      model: testModel({ filterSeconds: 1.5 }),
+      positions: [0, 1, 0, 0, 0],
+      testVolts: 1000,
+    });
+    // 10 GΩ · 150 pF = 1.5 s, and as much again for the filter.
+    expect(1 - circuit.settlingOhms(3) / circuit.endOhms()).toBeCloseTo(Math.exp(-1), 6);
+  });
+});
+
 describe("the circuit's terminals", () => {
   it("are held by the current limit: 2 mA through 100 kΩ are 200 V, whatever was selected", async () => {
     const box = testBox({ decades: [testDecade(1e5, { uncertaintyPercent: 1e-12 })] });

@@ -106,7 +106,9 @@ describe("virtual clock", () => {
     const clock = new VirtualClock({ startMs: 0 });
     const seen: number[] = [];
     clock.schedule(10, () => {
-      setImmediate(() => process.nextTick(() => void Promise.resolve().then(() => seen.push(clock.monotonicMs()))));
+      setImmediate(() =>
+        setImmediate(() => process.nextTick(() => void Promise.resolve().then(() => seen.push(clock.monotonicMs())))),
+      );
     });
     await clock.sleep(20);
     expect(seen).toEqual([10]);

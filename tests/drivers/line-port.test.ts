@@ -2,8 +2,9 @@ import { afterEach, beforeEach, describe, expect, it } from "vitest";
 import type { DriverError } from "@/drivers/driver-error";
 import { garbled, silent, slowBy } from "@/drivers/simulated/faults";
 import type { SimulatedDevice } from "@/drivers/simulated/scpi-device";
-import { SimulatedBinding, SimulatedSocket } from "@/drivers/simulated/simulated-binding";
+import { SimulatedBinding, SimulatedSocket, type SimulatedPort } from "@/drivers/simulated/simulated-binding";
 import { LinePort } from "@/drivers/transport/line-port";
+import type { PortSettings } from "@/drivers/transport/port-binding";
 import { VirtualClock } from "@/lib/engine/virtual-clock";
 import { seededRandom } from "../support/seeded-random";
 
@@ -96,6 +97,14 @@ describe("a line port", () => {
     const tokens = received.filter((line) => line.startsWith("*ESE ")).map((line) => Number(line.slice(5)));
     expect(tokens.every((token, index) => token !== tokens[index - 1])).toBe(true);
     expect([Math.min(...tokens), Math.max(...tokens)]).toEqual([100, 255]);
+  });
+
+  it("passes over torn remains of older answers on its way back into step", async () => {
+    socket.faults.push({
+      isSpent: false,
+      meet: (line, answer) => (line === "*ESE?" ? { text: `5E\u0000\n.2E+09\n${answer}`, lateMs: 0 } : null),
+    });
+    expect(await port.ask("A?")).toBe("re A?");
   });
 
   it("gives up a device that answers other questions for ever", async () => {
@@ -253,6 +262,25 @@ describe("the loss of a port", () => {
       await port.open();
     }
     expect(port.openings).toBe(101);
+  });
+
+  it("waits until the machine has let the port go before it opens it again", async () => {
+    const slow = new SimulatedBinding(new Map([[PATH, socket]]), clock);
+    const letGo = async (open: Promise<SimulatedPort>) => {
+      const opened = await open;
+      const close = opened.close.bind(opened);
+      opened.close = () => clock.sleep(300).then(close);
+      return opened;
+    };
+    const binding = { list: () => slow.list(), open: (settings: PortSettings) => letGo(slow.open(settings)) };
+    await port.close();
+    port = new LinePort({ device: "meter", path: PATH, baudRate: 9600, clock, binding });
+    await port.open();
+    socket.unplug();
+    await clock.sleep(1);
+    socket.plugIn();
+    await port.open();
+    expect(await port.ask("A?")).toBe("re A?");
   });
 
   it("opens once for two callers at the same time", async () => {
