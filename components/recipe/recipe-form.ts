@@ -70,7 +70,7 @@ export function recipeFormOf(document: RecipeDocument, modelIds: readonly string
   return {
     name: document.name,
     purpose: document.purpose,
-    resistances: typed(section.nominalOhms.map(shortOhms)),
+    resistances: typedOhms(section.nominalOhms),
     voltages: typed(section.testVolts.map(formatTestVolts)),
     excluded: section.excluded,
     settling: settlingFormOf(section.settling),
@@ -78,6 +78,11 @@ export function recipeFormOf(document: RecipeDocument, modelIds: readonly string
     order: section.order,
     modelIds,
   };
+}
+
+/** Resistances as a person would type them. */
+export function typedOhms(values: readonly number[]): string {
+  return typed(values.map(shortOhms));
 }
 
 /** As a person would type it: plain spaces, commas between. */

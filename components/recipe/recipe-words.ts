@@ -1,3 +1,4 @@
+import type { UnitModel } from "@/lib/schemas/instrument";
 import type { DecisionRule, PointOrder, RecipeVersion } from "@/lib/schemas/recipe";
 import type { SettlingPolicy } from "@/lib/schemas/settling";
 import { engineeringParts, formatDuration, formatTestVolts, THIN_SPACE } from "@/lib/units/format";
@@ -71,4 +72,10 @@ export const stateWords: Readonly<Record<RecipeVersion["state"], string>> = {
 /** A list as a sentence holds it: `50 V, 100 V and 250 V`. */
 export function listWords(words: readonly string[]): string {
   return words.length < 2 ? words.join("") : `${words.slice(0, -1).join(", ")} and ${words.at(-1)}`;
+}
+
+/** Names of the models that a recipe is for: `Pellham IR-10, Aldgrove M5`. */
+export function modelNames(modelIds: readonly string[], models: readonly UnitModel[]): string {
+  const named = models.filter(({ id }) => modelIds.includes(id)).map(({ maker, model }) => `${maker} ${model}`);
+  return named.length > 0 ? named.join(", ") : "all models";
 }

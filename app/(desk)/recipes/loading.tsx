@@ -1,0 +1,9 @@
+import { Loading } from "@/components/ui/loading";
+
+export default function RecipesLoading() {
+  return (
+    <main className="mx-auto w-full max-w-[1600px] px-6 pt-5 pb-6 max-sm:px-4">
+      <Loading what="recipes" />
+    </main>
+  );
+}
