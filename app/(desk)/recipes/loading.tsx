@@ -1,9 +1,10 @@
+import { PageFrame } from "@/components/run-views/page-frame";
 import { Loading } from "@/components/ui/loading";
 
 export default function RecipesLoading() {
   return (
-    <main className="mx-auto w-full max-w-[1600px] px-6 pt-5 pb-6 max-sm:px-4">
+    <PageFrame>
       <Loading what="recipes" />
-    </main>
+    </PageFrame>
   );
 }

@@ -3,6 +3,7 @@ import { usualForecast } from "@/components/recipe/forecast-recipe";
 import { filterRecipes, readRecipeFilter } from "@/components/recipe/recipe-filter";
 import { RecipeFilterBar } from "@/components/recipe/recipe-filter-bar";
 import { RecipesTable } from "@/components/recipe/recipes-table";
+import { PageFrame } from "@/components/run-views/page-frame";
 import { Button } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
 import { can } from "@/lib/auth/permissions";
@@ -27,7 +28,7 @@ export default async function RecipesPage({ searchParams }: RecipesPageProps) {
   const rows = chosen.map((recipe) => ({ recipe, forecast: usualForecast(recipe, benches, models) }));
   const mayWrite = can(person, "recipe.write");
   return (
-    <main className="mx-auto grid w-full max-w-[1600px] gap-4 px-6 pt-5 pb-6 max-sm:px-4">
+    <PageFrame>
       <div className="flex items-center gap-4">
         <h1 className="mr-auto">Recipes</h1>
         {mayWrite && (
@@ -46,7 +47,7 @@ export default async function RecipesPage({ searchParams }: RecipesPageProps) {
           <NoRecipes isFiltered={recipes.length > 0} mayWrite={mayWrite} />
         )}
       </section>
-    </main>
+    </PageFrame>
   );
 }
 

@@ -1,4 +1,5 @@
 import type { Metadata } from "next";
+import { PageFrame } from "@/components/run-views/page-frame";
 import { RefreshWhileActive } from "@/components/runs-list/refresh-while-active";
 import { RunFilter } from "@/components/runs-list/run-filter";
 import {
@@ -27,7 +28,7 @@ export default async function RunsPage({ searchParams }: { searchParams: Promise
   const { first, last, pages } = pageSpan(query, total);
   const hasActive = rows.some(({ status }) => !endedStatuses.includes(status));
   return (
-    <main className="mx-auto grid w-full max-w-[1600px] gap-4 px-6 pt-5 pb-6 max-sm:px-4">
+    <PageFrame>
       <h1>Runs</h1>
       {(total > 0 || isFiltered(query)) && <RunFilter benches={benches.map(({ id, name }) => ({ id, name }))} />}
       {rows.length > 0 ? (
@@ -46,7 +47,7 @@ export default async function RunsPage({ searchParams }: { searchParams: Promise
         </section>
       )}
       {hasActive && <RefreshWhileActive />}
-    </main>
+    </PageFrame>
   );
 }
 

@@ -3,6 +3,7 @@ import { notFound } from "next/navigation";
 import { RecipeView } from "@/components/recipe/recipe-view";
 import { stateWords } from "@/components/recipe/recipe-words";
 import { VersionList } from "@/components/recipe/version-list";
+import { PageFrame } from "@/components/run-views/page-frame";
 import { Breadcrumb } from "@/components/ui/breadcrumb";
 import { Button } from "@/components/ui/button";
 import { can } from "@/lib/auth/permissions";
@@ -26,37 +27,39 @@ export default async function RecipePage({ params, searchParams }: RecipePagePro
   const { models, benches } = await loadRegister();
   const newest = versions[0];
   return (
-    <main className="mx-auto w-full max-w-[1600px] px-6 pt-5 pb-6 max-sm:px-4">
-      <div className="flex flex-wrap items-start gap-x-4 gap-y-3">
-        <div className="min-w-0 flex-1">
-          <Breadcrumb crumbs={[{ label: "Recipes", href: "/recipes" }, { label: whichVersion(recipe, versions) }]} />
-          <h1 className="mt-0.5">{recipe.document.name}</h1>
-          {recipe.document.purpose && <p className="mt-1 max-w-prose text-ink-2">{recipe.document.purpose}</p>}
-        </div>
-        {can(person, "recipe.write") && (
-          <Button href={`/recipes/${recipeId}/edit`}>
-            {newest.state === "draft"
-              ? `Edit the draft, version ${newest.version}`
-              : `Edit as version ${newest.version + 1}`}
-          </Button>
-        )}
-      </div>
-      {recipe.state === "released" && can(person, "run.start") && (
-        <nav aria-label="Start a run with it" className="mt-3 flex flex-wrap items-center gap-2">
-          <span className="text-small text-ink-2">Start a run with it on</span>
-          {benches.map(({ id, name }) => (
-            <Button key={id} size="small" href={`/benches/${id}/start?recipe=${recipe.id}`}>
-              {name}
+    <PageFrame>
+      <div>
+        <div className="flex flex-wrap items-start gap-x-4 gap-y-3">
+          <div className="min-w-0 flex-1">
+            <Breadcrumb crumbs={[{ label: "Recipes", href: "/recipes" }, { label: whichVersion(recipe, versions) }]} />
+            <h1 className="mt-0.5">{recipe.document.name}</h1>
+            {recipe.document.purpose && <p className="mt-1 max-w-prose text-ink-2">{recipe.document.purpose}</p>}
+          </div>
+          {can(person, "recipe.write") && (
+            <Button href={`/recipes/${recipeId}/edit`}>
+              {newest.state === "draft"
+                ? `Edit the draft, version ${newest.version}`
+                : `Edit as version ${newest.version + 1}`}
             </Button>
-          ))}
-        </nav>
-      )}
-      <div className="mt-4">
-        <RecipeView recipe={recipe} benches={benches} models={models}>
-          <VersionList versions={versions} shown={recipe.version} />
-        </RecipeView>
+          )}
+        </div>
+        {recipe.state === "released" && can(person, "run.start") && (
+          <nav aria-label="Start a run with it" className="mt-3 flex flex-wrap items-center gap-2">
+            <span className="text-small text-ink-2">Start a run with it on</span>
+            {benches.map(({ id, name }) => (
+              <Button key={id} size="small" href={`/benches/${id}/start?recipe=${recipe.id}`}>
+                {name}
+              </Button>
+            ))}
+          </nav>
+        )}
+        <div className="mt-4">
+          <RecipeView recipe={recipe} benches={benches} models={models}>
+            <VersionList versions={versions} shown={recipe.version} />
+          </RecipeView>
+        </div>
       </div>
-    </main>
+    </PageFrame>
   );
 }
 

@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
+import { PageFrame } from "@/components/run-views/page-frame";
 import { StartForm } from "@/components/start/start-form";
 import { Breadcrumb } from "@/components/ui/breadcrumb";
 import type { Unit } from "@/lib/schemas/instrument";
@@ -25,11 +26,13 @@ export default async function StartPage({ params, searchParams }: StartPageProps
   const given = { unit: await unitOf(unit), recipe: recipes.find((version) => isMeant(version, recipe)) ?? null };
   const snapshot = benches.snapshots().find(({ id }) => id === benchId) ?? null;
   return (
-    <main className="mx-auto w-full max-w-[1180px] px-6 pt-5 pb-6 max-sm:px-4">
-      <Breadcrumb crumbs={[{ label: bench.name, href: "/benches" }, { label: "start a run" }]} />
-      <h1 className="mt-0.5 mb-4">Is everything ready?</h1>
-      <StartForm bench={bench} snapshot={snapshot} recipes={recipes} given={given} />
-    </main>
+    <PageFrame>
+      <div className="mx-auto w-full max-w-[1130px]">
+        <Breadcrumb crumbs={[{ label: bench.name, href: "/benches" }, { label: "start a run" }]} />
+        <h1 className="mt-0.5 mb-4">Is everything ready?</h1>
+        <StartForm bench={bench} snapshot={snapshot} recipes={recipes} given={given} />
+      </div>
+    </PageFrame>
   );
 }
 

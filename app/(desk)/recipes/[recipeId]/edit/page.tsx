@@ -1,6 +1,7 @@
 import type { Metadata } from "next";
 import { RecipeEditor } from "@/components/recipe/recipe-editor";
 import { recipeFormOf } from "@/components/recipe/recipe-form";
+import { PageFrame } from "@/components/run-views/page-frame";
 import { Breadcrumb } from "@/components/ui/breadcrumb";
 import { can } from "@/lib/auth/permissions";
 import type { RecipeVersion } from "@/lib/schemas/recipe";
@@ -16,23 +17,25 @@ export default async function EditRecipePage({ params }: { params: Promise<{ rec
   const [newest] = versions;
   const version = newest.state === "draft" ? newest.version : newest.version + 1;
   return (
-    <main className="mx-auto w-full max-w-[1600px] px-6 pt-5 pb-6 max-sm:px-4">
-      <Breadcrumb
-        crumbs={[
-          { label: "Recipes", href: "/recipes" },
-          { label: newest.document.name, href: `/recipes/${recipeId}` },
-          { label: `version ${version}, draft${releasedNote(versions)}` },
-        ]}
-      />
-      <h1 className="mt-0.5">{newest.document.name}</h1>
-      <RecipeEditor
-        recipeId={recipeId}
-        initial={recipeFormOf(newest.document, newest.modelIds)}
-        version={version}
-        register={await loadRegister()}
-        mayRelease={can(person, "recipe.release")}
-      />
-    </main>
+    <PageFrame>
+      <div>
+        <Breadcrumb
+          crumbs={[
+            { label: "Recipes", href: "/recipes" },
+            { label: newest.document.name, href: `/recipes/${recipeId}` },
+            { label: `version ${version}, draft${releasedNote(versions)}` },
+          ]}
+        />
+        <h1 className="mt-0.5">{newest.document.name}</h1>
+        <RecipeEditor
+          recipeId={recipeId}
+          initial={recipeFormOf(newest.document, newest.modelIds)}
+          version={version}
+          register={await loadRegister()}
+          mayRelease={can(person, "recipe.release")}
+        />
+      </div>
+    </PageFrame>
   );
 }
 
