@@ -5,8 +5,6 @@ import type { ReactNode } from "react";
 import { THEME_COOKIE, themeFrom } from "@/components/shell/theme";
 import "./globals.css";
 
-const GREEK = [{ prop: "unicode-range", value: "U+0370-03FF" }];
-
 const text = localFont({
   src: "../fonts/atkinson-hyperlegible-next.woff2",
   weight: "200 800",
@@ -26,7 +24,7 @@ const textGreek = localFont({
   variable: "--font-text-greek",
   adjustFontFallback: false,
   preload: false,
-  declarations: GREEK,
+  declarations: [{ prop: "unicode-range", value: "U+0370-03FF" }],
 });
 const monoGreek = localFont({
   src: "../fonts/source-code-pro-greek.woff2",
@@ -34,7 +32,7 @@ const monoGreek = localFont({
   variable: "--font-mono-greek",
   adjustFontFallback: false,
   preload: false,
-  declarations: GREEK,
+  declarations: [{ prop: "unicode-range", value: "U+0370-03FF" }],
 });
 
 const fontVariables = [text, mono, textGreek, monoGreek].map((font) => font.variable).join(" ");

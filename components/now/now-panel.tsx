@@ -83,7 +83,7 @@ function driftWords(active: ActivePoint | null): string {
 }
 
 function terminalWords(active: ActivePoint | null): string {
-  if (active?.terminalVolts == null) return "–";
+  if (!active || active.terminalVolts === null) return "–";
   const current = active.terminalAmperes;
   const volts = formatTerminalVolts(active.terminalVolts);
   return current === null ? volts : `${volts}  ${formatQuantity(current, "A", { digits: 3 })}`;

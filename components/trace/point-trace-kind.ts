@@ -88,7 +88,7 @@ function drawMarks(pen: Pen, read: Reader): void {
       ring(pen, pen.x(seconds), pen.y(ohms), 3.4, colours.water, colours.panel);
   }
   const last = samples.at(-1);
-  if (last?.ohms != null) ring(pen, pen.x(last.seconds), pen.y(last.ohms), 4.5, colours.water, colours.water);
+  if (last && last.ohms !== null) ring(pen, pen.x(last.seconds), pen.y(last.ohms), 4.5, colours.water, colours.water);
 }
 
 function drawStandard(pen: Pen, read: Reader): void {

@@ -73,7 +73,7 @@ export function describeTrace(data: PointTraceData): string {
   const digits = data.resolutionOhms;
   return [
     `Indication over ${last.seconds.toFixed(0)} s since the output was switched on:`,
-    first?.ohms != null && `from ${formatOhms(first.ohms, digits)}`,
+    first && first.ohms !== null && `from ${formatOhms(first.ohms, digits)}`,
     last.ohms === null ? "now over range;" : `to ${formatOhms(last.ohms, digits)};`,
     data.standardOhms !== null && `standard ${formatOhms(data.standardOhms)};`,
     data.limitOhms !== null && `limits ±${formatOhms(data.limitOhms)};`,
