@@ -11,6 +11,8 @@ export const CHECKPOINT_EVERY = 500;
 export interface ReplayTimeline {
   lastSeq: number;
   lastElapsedMs: number;
+  /** State after the last record. */
+  end: RunState;
   /** State after the records 1 to `seq`. */
   stateAt(seq: number): RunState;
   record(seq: number): RunEvent;
@@ -58,7 +60,7 @@ export function createTimeline(columns: JournalColumns): ReplayTimeline {
     }
     return low;
   };
-  return { lastSeq, lastElapsedMs: elapsedMsAt(lastSeq), stateAt, record, elapsedMsAt, seqAt };
+  return { lastSeq, lastElapsedMs: elapsedMsAt(lastSeq), end: stateAt(lastSeq), stateAt, record, elapsedMsAt, seqAt };
 }
 
 /** For each seq from 1: the index of its event, or −1 − the index of its reading. Throws RangeError when a number is missing. */

@@ -26,6 +26,13 @@ export function getLiveLink(): LiveLink {
   return shared;
 }
 
+/** For a part of the page that begins to follow: a connection that was refused earlier is tried again. */
+export function joinLiveLink(): LiveLink {
+  const link = getLiveLink();
+  if (!link.socket.active) link.socket.connect();
+  return link;
+}
+
 function openLink(): LiveLink {
   const socket: LiveSocket = io({
     path: "/socket.io",

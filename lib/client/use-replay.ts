@@ -15,6 +15,8 @@ export interface Replay {
 
 /** The URL follows the moment once it stands still, so that a moment can be sent to somebody. */
 const URL_AFTER_MS = 300;
+/** A replay is drawn as often as a live run is told. */
+const FRAME_MS = 45;
 
 /** A replay of one journal from the moment `atSeq`. */
 export function useReplay(columns: JournalColumns, atSeq: number): Replay {
@@ -36,8 +38,10 @@ export function useReplay(columns: JournalColumns, atSeq: number): Replay {
 function playFrames(store: ReplayStore): () => void {
   let lastMs = performance.now();
   let frame = requestAnimationFrame(function next(nowMs) {
-    store.getState().tick(Math.max(0, nowMs - lastMs));
-    lastMs = nowMs;
+    if (nowMs - lastMs >= FRAME_MS) {
+      store.getState().tick(nowMs - lastMs);
+      lastMs = nowMs;
+    }
     frame = requestAnimationFrame(next);
   });
   return () => cancelAnimationFrame(frame);

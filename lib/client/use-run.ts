@@ -7,7 +7,7 @@ import { api } from "./api";
 import type { Contact } from "./contact";
 import { followRun } from "./run-follower";
 import { createRunStore } from "./run-store";
-import { getLiveLink } from "./socket";
+import { joinLiveLink } from "./socket";
 import { useContact } from "./use-contact";
 
 export interface LiveRun {
@@ -19,7 +19,7 @@ export interface LiveRun {
 export function useRun(runId: string, initial: RunState): LiveRun {
   const [store] = useState(() => createRunStore(initial));
   useEffect(() => {
-    const { socket, contact, onWake } = getLiveLink();
+    const { socket, contact, onWake } = joinLiveLink();
     return followRun({
       runId,
       store,

@@ -27,7 +27,11 @@ function applyStatus(state: RunState, event: RunEvent): RunState {
     case "point.judged":
       return {
         ...state,
-        points: patchPoint(state, event.data.point, { outcome: "judged", judgement: event.data.judgement }),
+        points: patchPoint(state, event.data.point, {
+          outcome: "judged",
+          judgement: event.data.judgement,
+          judgedElapsedMs: event.elapsedMs,
+        }),
       };
     case "point.skipped":
       return { ...state, points: patchPoint(state, event.data.point, { outcome: "skipped" }) };
@@ -70,7 +74,7 @@ function applyStatus(state: RunState, event: RunEvent): RunState {
 }
 
 function begin(state: RunState, event: RunEventOf<"run.started">): RunState {
-  const open: PointState = { attempts: 0, outcome: "open", judgement: null };
+  const open: PointState = { attempts: 0, outcome: "open", judgement: null, judgedElapsedMs: null };
   return {
     ...state,
     status: "running",

@@ -10,6 +10,8 @@ export interface PointState {
   attempts: number;
   outcome: "open" | "judged" | "skipped";
   judgement: Judgement | null;
+  /** Run time of the judgement. */
+  judgedElapsedMs: number | null;
 }
 
 /** Steps of one attempt, in their order. */

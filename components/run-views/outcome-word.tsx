@@ -1,0 +1,21 @@
+import { VerdictWord, type PointVerdict } from "@/components/marks/verdict";
+import { countsInWords } from "@/components/runs-list/run-words";
+import type { RunSummary, VerdictCounts } from "@/lib/schemas/run";
+
+/** The worst verdict of a run as mark and word, and its counts. A run that came to nothing has counts only. */
+export function OutcomeWord({ run }: { run: Pick<RunSummary, "counts" | "status"> }) {
+  const verdict = worstVerdict(run.counts);
+  return (
+    <span className="inline-flex flex-wrap items-center gap-x-3">
+      {verdict && <VerdictWord verdict={verdict} className="min-w-20" />}
+      <span className="text-small text-ink-2">{countsInWords(run.counts, run.status)}</span>
+    </span>
+  );
+}
+
+function worstVerdict(counts: VerdictCounts): PointVerdict | null {
+  if (counts.outside > 0) return "outside";
+  if (counts.unsettled > 0) return "unsettled";
+  if (counts.doubtful > 0) return "doubtful";
+  return counts.inside > 0 ? "inside" : null;
+}
