@@ -1,4 +1,5 @@
-export type DataErrorCode = "database-in-use" | "database-too-old" | "database-damaged" | "release-frozen" | "bench-taken" | "unknown-record";
+export type DataErrorCode =
+  "database-in-use" | "database-too-old" | "database-damaged" | "release-frozen" | "bench-taken" | "unknown-record";
 
 /** Trouble with stored data, in words. Recognised by name and code. */
 export class DataError extends Error {

@@ -12,7 +12,10 @@ export function takeFolder(dataFolder: string): () => void {
   const file = path.join(dataFolder, LOCK_NAME);
   const owner = existsSync(file) ? Number(readFileSync(file, "utf8").split(" ")[0]) : null;
   if (owner !== null && owner !== process.pid && isAlive(owner, readFileSync(file, "utf8"))) {
-    throw new DataError("database-in-use", `Another Stepwell (process ${owner}) uses the data folder ${dataFolder}. Stop it first.`);
+    throw new DataError(
+      "database-in-use",
+      `Another Stepwell (process ${owner}) uses the data folder ${dataFolder}. Stop it first.`,
+    );
   }
   rmSync(file, { force: true });
   const handle = openSync(file, "wx");

@@ -9,7 +9,11 @@ import type { RecipesRepository } from "./repositories";
 
 export function createRecipesRepository(database: Database): RecipesRepository {
   const newestFirst = async (where: { recipeId?: string; state?: string }, transaction?: Transaction) => {
-    const rows = await RecipeVersionRow.findAll({ where, order: [["version", "DESC"]], transaction: transaction ?? null });
+    const rows = await RecipeVersionRow.findAll({
+      where,
+      order: [["version", "DESC"]],
+      transaction: transaction ?? null,
+    });
     return rows.map(toVersion);
   };
   return {
@@ -17,7 +21,8 @@ export function createRecipesRepository(database: Database): RecipesRepository {
     listReleased: async () => newestOfEach(await newestFirst({ state: "released" })),
     versions: (recipeId) => newestFirst({ recipeId }),
     getVersion: async (id) => nullOr(await RecipeVersionRow.findByPk(id), toVersion),
-    create: (recipe, by) => database.write((transaction) => insertVersion(crypto.randomUUID(), 1, recipe, by, transaction)),
+    create: (recipe, by) =>
+      database.write((transaction) => insertVersion(crypto.randomUUID(), 1, recipe, by, transaction)),
     save: (recipeId, recipe, by) =>
       database.write(async (transaction) => {
         const [newest] = await newestFirst({ recipeId }, transaction);
@@ -28,7 +33,13 @@ export function createRecipesRepository(database: Database): RecipesRepository {
   };
 }
 
-async function insertVersion(recipeId: string, version: number, recipe: SaveRecipe, by: string, transaction: Transaction): Promise<RecipeVersion> {
+async function insertVersion(
+  recipeId: string,
+  version: number,
+  recipe: SaveRecipe,
+  by: string,
+  transaction: Transaction,
+): Promise<RecipeVersion> {
   const { document, modelIds, release } = saveRecipeSchema.parse(recipe);
   const row = {
     id: crypto.randomUUID(),
@@ -43,11 +54,31 @@ async function insertVersion(recipeId: string, version: number, recipe: SaveReci
   return toVersion(await RecipeVersionRow.create(row, { transaction }));
 }
 
-async function changeDraft(draft: RecipeVersion, recipe: SaveRecipe, by: string, transaction: Transaction): Promise<RecipeVersion> {
+async function changeDraft(
+  draft: RecipeVersion,
+  recipe: SaveRecipe,
+  by: string,
+  transaction: Transaction,
+): Promise<RecipeVersion> {
   const { document, modelIds, release } = saveRecipeSchema.parse(recipe);
-  const change = { document: JSON.stringify(document), modelIds: JSON.stringify(modelIds), changedBy: by, changedAtMs: Date.now() };
-  await RecipeVersionRow.update({ ...change, state: release ? "released" : "draft" }, { where: { id: draft.id }, transaction });
-  return { ...draft, document, modelIds, state: release ? "released" : "draft", changedBy: by, changedAtMs: change.changedAtMs };
+  const change = {
+    document: JSON.stringify(document),
+    modelIds: JSON.stringify(modelIds),
+    changedBy: by,
+    changedAtMs: Date.now(),
+  };
+  await RecipeVersionRow.update(
+    { ...change, state: release ? "released" : "draft" },
+    { where: { id: draft.id }, transaction },
+  );
+  return {
+    ...draft,
+    document,
+    modelIds,
+    state: release ? "released" : "draft",
+    changedBy: by,
+    changedAtMs: change.changedAtMs,
+  };
 }
 
 function newestOfEach(newestFirst: readonly RecipeVersion[]): RecipeVersion[] {

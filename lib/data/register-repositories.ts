@@ -15,7 +15,9 @@ export function createUnitModelsRepository(database: Database): UnitModelsReposi
 }
 
 async function listModels(): Promise<UnitModel[]> {
-  return (await UnitModelRow.findAll({ order: [["id", "ASC"]] })).map((row) => unitModelSchema.parse(JSON.parse(row.document)));
+  return (await UnitModelRow.findAll({ order: [["id", "ASC"]] })).map((row) =>
+    unitModelSchema.parse(JSON.parse(row.document)),
+  );
 }
 
 export function createUnitsRepository(database: Database): UnitsRepository {
@@ -41,7 +43,13 @@ export function createUnitsRepository(database: Database): UnitsRepository {
 
 function toUnit(row: UnitRow, model: UnitModel | undefined): Unit {
   const simulation: unknown = row.simulation === null ? null : JSON.parse(row.simulation);
-  return unitSchema.parse({ id: row.id, model, serialNumber: row.serialNumber, assetNumber: row.assetNumber, simulation });
+  return unitSchema.parse({
+    id: row.id,
+    model,
+    serialNumber: row.serialNumber,
+    assetNumber: row.assetNumber,
+    simulation,
+  });
 }
 
 function unitWords({ assetNumber, serialNumber, model }: Unit): string {
@@ -50,7 +58,10 @@ function unitWords({ assetNumber, serialNumber, model }: Unit): string {
 
 export function createStandardsRepository(database: Database): StandardsRepository {
   return {
-    list: async () => (await StandardRow.findAll({ order: [["id", "ASC"]] })).map((row) => standardSchema.parse(JSON.parse(row.document))),
+    list: async () =>
+      (await StandardRow.findAll({ order: [["id", "ASC"]] })).map((row) =>
+        standardSchema.parse(JSON.parse(row.document)),
+      ),
     create: async (standard) => {
       const row = { id: standard.id, document: JSON.stringify(standardSchema.parse(standard)) };
       await database.write((transaction) => StandardRow.create(row, { transaction }));
@@ -62,8 +73,12 @@ export function createBenchesRepository(database: Database): BenchesRepository {
   return {
     list: async () => {
       const rows = await BenchRow.findAll({ order: [["position", "ASC"]] });
-      const standards = new Map((await StandardRow.findAll()).map((row) => [row.id, JSON.parse(row.document) as unknown]));
-      return rows.map((row) => benchSchema.parse({ ...JSON.parse(row.document), standard: standards.get(row.standardId) }));
+      const standards = new Map(
+        (await StandardRow.findAll()).map((row) => [row.id, JSON.parse(row.document) as unknown]),
+      );
+      return rows.map((row) =>
+        benchSchema.parse({ ...JSON.parse(row.document), standard: standards.get(row.standardId) }),
+      );
     },
     create: async (bench, position) => {
       const { standard, ...document } = benchSchema.parse(bench);

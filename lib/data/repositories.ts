@@ -1,6 +1,6 @@
 import type { Bench } from "@/lib/schemas/bench";
 import type { Standard, Unit, UnitModel } from "@/lib/schemas/instrument";
-import type { ReadingColumns } from "@/lib/schemas/journal-columns";
+import type { JournalColumns, ReadingColumns } from "@/lib/schemas/journal-columns";
 import type { Person } from "@/lib/schemas/person";
 import type { RecipeVersion } from "@/lib/schemas/recipe";
 import type { RunQuery, RunSummary, SaveRecipe } from "@/lib/schemas/run";
@@ -15,9 +15,14 @@ export interface JournalRepository {
   /** All events without readings, in order. */
   events(runId: string): Promise<RunEvent[]>;
   readings(runId: string, options: { point?: number | undefined }): Promise<ReadingColumns>;
+  /** The whole journal as it stands at one moment. */
+  columns(runId: string): Promise<JournalColumns>;
   /** 0 for a run without records. */
   lastSeq(runId: string): Promise<number>;
-  /** Whether the records are those that were written; else the first record of the first batch that is not. */
+  /**
+   * Whether the records are those that were written; else the first record of the first batch that is not.
+   * A journal from whose end whole batches were taken away looks intact: only its last hash, kept elsewhere, shows that.
+   */
   verifyChain(runId: string): Promise<{ intact: true } | { intact: false; firstBadSeq: number }>;
 }
 

@@ -22,7 +22,9 @@ export function createRunsRepository(database: Database): RunsRepository {
       await database.write((transaction) => RunRow.destroy({ where: { id: runId, summary: null }, transaction }));
     },
     updateSummary: async (summary) => {
-      await database.write((transaction) => RunRow.update(summaryColumns(summary), { where: { id: summary.id }, transaction }));
+      await database.write((transaction) =>
+        RunRow.update(summaryColumns(summary), { where: { id: summary.id }, transaction }),
+      );
     },
     get: async (runId) => nullOr(await RunRow.findByPk(runId), (row) => (row.summary === null ? null : toSummary(row))),
     query: async (query) => {
@@ -34,7 +36,8 @@ export function createRunsRepository(database: Database): RunsRepository {
       });
       return { rows: rows.map(toSummary), total: count };
     },
-    activeOnBench: async (benchId) => nullOr(await RunRow.findOne({ where: { benchId, isActive: true } }), (row) => ({ runId: row.id })),
+    activeOnBench: async (benchId) =>
+      nullOr(await RunRow.findOne({ where: { benchId, isActive: true } }), (row) => ({ runId: row.id })),
     latestOfUnit: async (unitId) => {
       const where = { unitId, isActive: false, summary: { [Op.ne]: null } };
       return nullOr(await RunRow.findOne({ where, order: [["number", "DESC"]] }), toSummary);
@@ -42,7 +45,10 @@ export function createRunsRepository(database: Database): RunsRepository {
   };
 }
 
-async function reserve(database: Database, { runId, benchId, unitId }: { runId: string; benchId: string; unitId: string }): Promise<number> {
+async function reserve(
+  database: Database,
+  { runId, benchId, unitId }: { runId: string; benchId: string; unitId: string },
+): Promise<number> {
   try {
     return await database.write(async (transaction) => {
       const highest = (await RunRow.max<number | null, RunRow>("number", { transaction })) ?? 0;
@@ -96,14 +102,19 @@ function whereOf({ search, status, bench, outside }: RunQuery): WhereOptions<Run
 
 function searchOf(search: string): WhereOptions<RunRow> {
   const pattern = `%${search.replace(/[%_\\]/gu, "")}%`;
-  const texts = ["unitName", "assetNumber", "recipeName", "startedBy"].map((column) => ({ [column]: { [Op.like]: pattern } }));
+  const texts = ["unitName", "assetNumber", "recipeName", "startedBy"].map((column) => ({
+    [column]: { [Op.like]: pattern },
+  }));
   const number = /^\d+$/u.test(search) ? [{ number: Number(search) }] : [];
   return { [Op.or]: [...texts, ...number] };
 }
 
 function orderOf({ sort, direction }: RunQuery): Order {
   const way = direction === "rising" ? "ASC" : "DESC";
-  return [[sortColumns[sort], way], ["number", "DESC"]];
+  return [
+    [sortColumns[sort], way],
+    ["number", "DESC"],
+  ];
 }
 
 function toSummary(row: RunRow): RunSummary {

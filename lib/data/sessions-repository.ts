@@ -22,7 +22,9 @@ export function createSessionsRepository(database: Database): SessionsRepository
         return rows.map((row) => row.idHash);
       }),
     removeExpired: async (nowMs) => {
-      await database.write((transaction) => SessionRow.destroy({ where: { expiresAtMs: { [Op.lte]: nowMs } }, transaction }));
+      await database.write((transaction) =>
+        SessionRow.destroy({ where: { expiresAtMs: { [Op.lte]: nowMs } }, transaction }),
+      );
     },
   };
 }

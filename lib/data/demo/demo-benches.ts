@@ -12,9 +12,30 @@ const warmRoom = { lowestCelsius: 18, highestCelsius: 28, highestHumidityPercent
 const coldRoom = { lowestCelsius: 4, highestCelsius: 12, highestHumidityPercent: 75 };
 
 const benches = [
-  { id: "north", name: "North bench", room: "Room 2", standardId: "db-9-1", roomLimits: warmRoom, simulation: { seed: 11, roomCelsius: 22.8, roomHumidityPercent: 41 } },
-  { id: "window", name: "Window bench", room: "Room 2", standardId: "db-9-2", roomLimits: warmRoom, simulation: { seed: 12, roomCelsius: 22.9, roomHumidityPercent: 41 } },
-  { id: "cold-room", name: "Cold room bench", room: "Room 5", standardId: "db-3", roomLimits: coldRoom, simulation: { seed: 13, roomCelsius: 8.1, roomHumidityPercent: 55 } },
+  {
+    id: "north",
+    name: "North bench",
+    room: "Room 2",
+    standardId: "db-9-1",
+    roomLimits: warmRoom,
+    simulation: { seed: 11, roomCelsius: 22.8, roomHumidityPercent: 41 },
+  },
+  {
+    id: "window",
+    name: "Window bench",
+    room: "Room 2",
+    standardId: "db-9-2",
+    roomLimits: warmRoom,
+    simulation: { seed: 12, roomCelsius: 22.9, roomHumidityPercent: 41 },
+  },
+  {
+    id: "cold-room",
+    name: "Cold room bench",
+    room: "Room 5",
+    standardId: "db-3",
+    roomLimits: coldRoom,
+    simulation: { seed: 13, roomCelsius: 8.1, roomHumidityPercent: 55 },
+  },
 ] as const;
 
 /** The workshop's three benches, all simulated. */

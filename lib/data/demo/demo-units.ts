@@ -81,11 +81,26 @@ interface UnitData {
 
 const units: readonly UnitData[] = [
   { assetNumber: "TW-0355", modelId: "aldgrove-m5", serialNumber: "A5-30117", fault: {} },
-  { assetNumber: "TW-0377", modelId: "aldgrove-m5", serialNumber: "A5-30290", fault: { leakageSiemens: 1 / 240e9, gainError: 0.004 } },
+  {
+    assetNumber: "TW-0377",
+    modelId: "aldgrove-m5",
+    serialNumber: "A5-30290",
+    fault: { leakageSiemens: 1 / 240e9, gainError: 0.004 },
+  },
   { assetNumber: "TW-0398", modelId: "pellham-ir-10", serialNumber: "P10-4471", fault: { gainError: -0.002 } },
   { assetNumber: "TW-0409", modelId: "pellham-ir-10", serialNumber: "P10-4502", fault: { offsetAmperes: 0.32e-9 } },
-  { assetNumber: "TW-0412", modelId: "pellham-ir-10", serialNumber: "P10-4519", fault: { offsetAmperes: 0.08e-9, gainError: 0.002 } },
-  { assetNumber: "TW-0421", modelId: "pellham-ir-10", serialNumber: "P10-4533", fault: { gainError: 0.018, noise: 1.5e-3 } },
+  {
+    assetNumber: "TW-0412",
+    modelId: "pellham-ir-10",
+    serialNumber: "P10-4519",
+    fault: { offsetAmperes: 0.08e-9, gainError: 0.002 },
+  },
+  {
+    assetNumber: "TW-0421",
+    modelId: "pellham-ir-10",
+    serialNumber: "P10-4533",
+    fault: { gainError: 0.018, noise: 1.5e-3 },
+  },
   { assetNumber: "TW-0433", modelId: "sorrel-k2", serialNumber: "K2-0081", fault: {} },
   { assetNumber: "TW-0440", modelId: "sorrel-k2", serialNumber: "K2-0096", fault: { leakageSiemens: 1 / 60e9 } },
 ];
