@@ -23,6 +23,8 @@ const tokens = [
   "amber",
   "amber-text",
   "hatch-ink",
+  "dial",
+  "dial-ink",
 ] as const;
 
 const colors = Object.fromEntries(tokens.map((token) => [token, `var(--${token})`]));

@@ -39,8 +39,11 @@ export function BenchBand(props: BenchBandProps) {
       {isHazardous && <div aria-hidden="true" className="hatch absolute inset-y-0 left-0 w-3.5" />}
       <div
         className={classNames(
-          "grid items-start gap-x-6 gap-y-3 py-3.5 pr-4.5 lg:grid-cols-[17rem_minmax(0,1fr)_15rem]",
-          isHazardous ? "pl-8" : "pl-4.5",
+          "grid items-start gap-x-6 gap-y-3 py-3.5 pr-4.5",
+          // The hatch takes its width from the first column, so that the bands' columns stand under each other.
+          isHazardous
+            ? "pl-8 lg:grid-cols-[16.125rem_minmax(0,1fr)_15rem]"
+            : "pl-4.5 lg:grid-cols-[17rem_minmax(0,1fr)_15rem]",
         )}
       >
         <BenchFacts snapshot={snapshot} run={run} />
@@ -109,8 +112,9 @@ function withReading(run: RunState) {
   const sentence = stateSentence(run);
   const ohms = run.active?.indicationOhms ?? null;
   if (run.status !== "running" || ohms === null) return sentence;
-  const resolution = displayResolutionOhms(run.setup?.unit.model.ranges ?? [], ohms);
-  return { ...sentence, rest: `${sentence.rest}, reads ${formatOhms(ohms, resolution)}` };
+  const ranges = run.setup?.unit.model.ranges;
+  const reading = formatOhms(ohms, ranges && displayResolutionOhms(ranges, ohms));
+  return { ...sentence, rest: `${sentence.rest}, reads ${reading}` };
 }
 
 function BenchTime({ snapshot, run, actions, clockSpeed, nowMs = null }: BenchBandProps) {

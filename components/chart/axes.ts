@@ -22,6 +22,8 @@ export function axis(
     space,
     splits,
     values,
+    // A logarithmic axis would otherwise drop the ticks that it did not choose by itself.
+    filter: (_, chosen) => chosen,
     stroke: () => colours().ink2,
     // The family is known once the page is styled; uPlot scales the size by itself.
     font: `12px ${colours().monoFamily}`,

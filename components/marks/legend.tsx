@@ -3,7 +3,7 @@ import { MarkShape, VERDICT_INKS, type PointVerdict } from "./verdict";
 
 const WORDS: Readonly<Record<PointVerdict, string>> = {
   inside: "inside",
-  doubtful: "doubtful: nearer to the limit than the guard band",
+  doubtful: "doubtful: within the guard band",
   outside: "outside",
   unsettled: "unsettled",
   "not-stated": "no limit stated",

@@ -29,7 +29,7 @@ export function Sliver({ errorOhms, limitOhms, uncertaintyOhms = null, verdict, 
     <svg
       aria-hidden="true"
       viewBox="0 0 56 14"
-      className={classNames("h-3.5 w-14 flex-none", VERDICT_INKS[verdict], className)}
+      className={classNames("inline-block h-3.5 w-14 min-w-8 align-middle", VERDICT_INKS[verdict], className)}
     >
       {limitOhms !== null && (
         <>

@@ -49,7 +49,7 @@ export function VerdictWord({ verdict, children, className }: VerdictWordProps) 
   return (
     <span
       className={classNames(
-        "inline-flex items-center gap-1.5 text-small font-semibold whitespace-nowrap",
+        "inline-flex items-center gap-1.5 align-middle text-small font-semibold whitespace-nowrap",
         VERDICT_INKS[verdict],
         className,
       )}

@@ -65,12 +65,13 @@ export function CellContent({ cell }: { cell: MatrixCell }) {
 /** Inside and outside are told by their sliver; the other verdicts carry their mark as well. */
 function JudgedContent({ judgement }: { judgement: Judgement }) {
   const { verdict } = judgement;
+  const hasSliver = judgement.limitOhms !== null && judgement.errorOhms !== null;
   const isMarked = verdict !== "inside" && verdict !== "outside";
   return (
     <>
-      {isMarked && judgement.limitOhms === null ? <Mark verdict={verdict} /> : <Sliver {...sliverProps(judgement)} />}
+      {hasSliver ? <Sliver {...sliverProps(judgement)} /> : <Mark verdict={verdict} />}
       <span className="flex items-center gap-1">
-        {isMarked && judgement.limitOhms !== null && <Mark verdict={verdict} />}
+        {isMarked && hasSliver && <Mark verdict={verdict} />}
         <b className={classNames(verdict === "inside" ? "font-medium text-ink" : VERDICT_INKS[verdict])}>
           {errorWords(judgement)}
         </b>

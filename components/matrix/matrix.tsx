@@ -4,6 +4,7 @@ import { useState, type KeyboardEvent } from "react";
 import type { RunState } from "@/lib/journal/run-state";
 import { formatOhms, formatTestVolts } from "@/lib/units/format";
 import { Legend } from "@/components/marks/legend";
+import type { PointVerdict } from "@/components/marks/verdict";
 import { classNames } from "@/components/ui/class-names";
 import { ExcludedList } from "./excluded-list";
 import { CellContent, cellLooks, cellTitle } from "./matrix-cell";
@@ -32,17 +33,31 @@ export function Matrix(props: MatrixProps) {
       <div className="overflow-x-auto">
         <table
           className="w-full table-fixed border-separate border-spacing-[3px]"
-          style={{ minWidth: `${5.75 + table.testVolts.length * 6.6}rem` }}
+          style={{ minWidth: `${5.75 + table.testVolts.length * 7.3}rem` }}
         >
           <caption className="sr-only">{caption}</caption>
           <MatrixHead testVolts={table.testVolts} />
           <MatrixBody table={table} {...props} />
         </table>
       </div>
-      {legend && <Legend className="px-1 pt-2" excluded={table.excluded.length > 0} />}
+      {legend && <Legend className="px-1 pt-2" verdicts={verdictsIn(table)} excluded={table.excluded.length > 0} />}
       <ExcludedList excluded={table.excluded} />
     </div>
   );
+}
+
+/** The verdicts that a run always can come to, and whichever else has come up. */
+function verdictsIn(table: MatrixTable): PointVerdict[] {
+  const cells = table.rows.flatMap((row) => row.cells);
+  const has = (verdict: PointVerdict) =>
+    cells.some((cell) => cell.kind === verdict || (cell.kind === "judged" && cell.judgement.verdict === verdict));
+  return [
+    "inside",
+    ...(["doubtful"] as const).filter(has),
+    "outside",
+    "unsettled",
+    ...(["not-stated", "skipped"] as const).filter(has),
+  ];
 }
 
 function MatrixHead({ testVolts }: { testVolts: readonly number[] }) {
@@ -118,7 +133,7 @@ interface CellBoxProps {
   onFocus: () => void;
 }
 
-const BOX = "flex h-7.25 w-full items-center justify-between gap-1 px-2 whitespace-nowrap";
+const BOX = "flex h-7.25 w-full items-center justify-between gap-1 px-1.5 whitespace-nowrap";
 
 function CellBox({ cell, place, isTabStop, onSelect, onFocus }: CellBoxProps) {
   if (!onSelect || !("point" in cell)) {

@@ -36,9 +36,7 @@ function Digit({ position }: { position: number | null }) {
     <span
       className={classNames(
         "block h-10.5 overflow-hidden rounded font-mono text-[1.5625rem] leading-10.5 font-semibold max-sm:text-[1.25rem]",
-        isSet
-          ? "bg-ink text-panel night:bg-ground night:text-ink night:outline-1 night:-outline-offset-1 night:outline-line-strong"
-          : "bg-sunken text-ink-3",
+        isSet ? "bg-dial text-dial-ink" : "bg-sunken text-ink-3",
       )}
     >
       <span key={shown.turns} className={classNames("block", shown.turns > 0 && "dial-turn")}>

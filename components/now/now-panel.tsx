@@ -86,7 +86,7 @@ function terminalWords(active: ActivePoint | null): string {
   if (!active || active.terminalVolts === null) return "–";
   const current = active.terminalAmperes;
   const volts = formatTerminalVolts(active.terminalVolts);
-  return current === null ? volts : `${volts}  ${formatQuantity(current, "A", { digits: 3 })}`;
+  return current === null ? volts : `${volts}\u2003${formatQuantity(current, "A", { digits: 3 })}`;
 }
 
 function endedWords({ ohms, settlingSeconds }: { ohms: number | null; settlingSeconds: number }): string {

@@ -23,8 +23,8 @@ export interface ErrorChartFrame {
 
 type Reader = PlotReader<ErrorChartFrame>;
 
-/** The largest limits are this small a part of the axis at least; what lies farther is drawn at the edge. */
-const FARTHEST_LIMITS = 4;
+/** Errors up to this many of the largest limits set the axis; what lies farther stands at its edge with its figure. */
+const FARTHEST_LIMITS = 1.6;
 const LEAST_REACH_PERCENT = 5;
 
 /** Errors against resistance on a logarithmic axis, one line a test voltage. */
@@ -180,9 +180,21 @@ function drawPoint(pen: Pen, point: ErrorPoint, colour: string, colours: ChartCo
       { colour, width: 1 },
     );
   }
+  if (Math.abs(y - pen.y(errorPercent)) > pen.ratio) writeFigure(pen, x, y, errorPercent, colours);
   if (verdict === "outside") arrow(pen, x, y, errorPercent < 0 ? "down" : "up", colours.brick);
   else if (verdict === "unsettled") ring(pen, x, y, 3.4, colours.plum, colours.plum);
   else ring(pen, x, y, 2.8, colour, colours.panel);
+}
+
+function writeFigure(pen: Pen, x: number, y: number, errorPercent: number, colours: ChartColours): void {
+  writeWords(pen, formatErrorPercent(errorPercent, 1), x - 8 * pen.ratio, y, {
+    colour: colours.ink2,
+    family: colours.monoFamily,
+    size: 11.5,
+    align: "right",
+    baseline: "middle",
+    halo: colours.panel,
+  });
 }
 
 /** An error beyond the axis stays at its edge. */

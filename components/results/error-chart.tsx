@@ -4,6 +4,7 @@ import { useMemo, useState } from "react";
 import type { RunState } from "@/lib/journal/run-state";
 import { formatTestVolts } from "@/lib/units/format";
 import { Plot } from "@/components/chart/plot";
+import { Select } from "@/components/ui/controls";
 import { errorChartKind } from "./error-chart-kind";
 import { errorSeries, middleVolts, resistancesOf, type ErrorSeries } from "./error-series";
 import { ErrorTable } from "./error-table";
@@ -42,17 +43,17 @@ function LimitChoice({ series, limitVolts, onChoose }: LimitChoiceProps) {
   return (
     <label className="flex items-center justify-end gap-2 px-1.5 text-label text-ink-2" data-screen-only>
       Limits at
-      <select
+      <Select
         value={limitVolts ?? ""}
         onChange={(event) => onChoose(Number(event.target.value))}
-        className="h-7 rounded border border-line-strong bg-panel px-1.5 font-mono text-ink"
+        className="w-28 text-text"
       >
         {series.map(({ testVolts }) => (
           <option key={testVolts} value={testVolts}>
             {formatTestVolts(testVolts)}
           </option>
         ))}
-      </select>
+      </Select>
     </label>
   );
 }

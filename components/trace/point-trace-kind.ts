@@ -92,11 +92,10 @@ function drawMarks(pen: Pen, read: Reader): void {
 }
 
 function drawStandard(pen: Pen, read: Reader): void {
-  const { standardOhms, expectedOhms } = read.frame();
+  const { standardOhms } = read.frame();
   if (standardOhms === null) return;
   const { moss, textFamily } = read.colours();
   const y = pen.y(standardOhms);
-  const isBelow = expectedOhms !== null && expectedOhms > standardOhms;
   strokePath(
     pen,
     [
@@ -109,7 +108,7 @@ function drawStandard(pen: Pen, read: Reader): void {
     pen,
     `standard ${formatOhms(standardOhms)}`,
     pen.right - 2 * pen.ratio,
-    y + (isBelow ? 14 : -5) * pen.ratio,
+    y + (isFalling(read.frame()) ? 14 : -5) * pen.ratio,
     {
       colour: moss,
       family: textFamily,
@@ -120,28 +119,38 @@ function drawStandard(pen: Pen, read: Reader): void {
 
 function drawExpected(pen: Pen, read: Reader): void {
   const frame = read.frame();
-  const { expectedOhms, standardOhms, samples } = frame;
+  const { expectedOhms, samples } = frame;
   if (expectedOhms === null || samples.at(-1)?.phase !== "settling") return;
   const { ink2, ink3, textFamily } = read.colours();
   const until = pen.u.scales.x!.max ?? 0;
   const curve = expectedCurve(frame, until).map(([seconds, ohms]): [number, number] => [pen.x(seconds), pen.y(ohms)]);
   strokePath(pen, curve, { colour: ink3, width: 1.2, dash: [5, 4] });
-  const isAbove = standardOhms !== null && expectedOhms > standardOhms;
-  const y = Math.min(
-    pen.bottom - 6 * pen.ratio,
-    Math.max(pen.top + 12 * pen.ratio, pen.y(expectedOhms) + (isAbove ? -6 : 16) * pen.ratio),
-  );
   writeWords(
     pen,
     `expected to end at ${formatOhms(expectedOhms, frame.resolutionOhms)}`,
     pen.right - 2 * pen.ratio,
-    y,
+    expectedWordsY(pen, frame, curve),
     {
       colour: ink2,
       family: textFamily,
       align: "right",
     },
   );
+}
+
+/** Below a rising trace, above a falling one: where nothing else is drawn. */
+function expectedWordsY(pen: Pen, frame: PointTraceData, curve: readonly (readonly [number, number])[]): number {
+  const trace = frame.samples.flatMap(({ seconds, ohms }) => (ohms === null ? [] : [[pen.x(seconds), pen.y(ohms)]]));
+  const near = [...curve, ...trace].filter(([x]) => x! > pen.right - 190 * pen.ratio).map(([, y]) => y!);
+  return isFalling(frame)
+    ? Math.max(pen.top + 12 * pen.ratio, Math.min(...near) - 8 * pen.ratio)
+    : Math.min(pen.bottom - 22 * pen.ratio, Math.max(...near) + 18 * pen.ratio);
+}
+
+/** Whether the display comes down to the value that it is heading for. */
+function isFalling({ samples, expectedOhms }: PointTraceData): boolean {
+  const last = samples.at(-1)?.ohms ?? null;
+  return last !== null && expectedOhms !== null && last > expectedOhms;
 }
 
 function drawWindowWord(pen: Pen, read: Reader): void {
@@ -163,5 +172,5 @@ function drawUnits(pen: Pen, read: Reader): void {
   const { ink2, monoFamily } = read.colours();
   const look = { colour: ink2, family: monoFamily, align: "right" } as const;
   writeWords(pen, ohmScale(read.frame()).unit, pen.left - 6 * pen.ratio, pen.top - 6 * pen.ratio, look);
-  writeWords(pen, "s", pen.right, pen.bottom + 18 * pen.ratio, look);
+  writeWords(pen, "s", pen.right, pen.bottom + 15 * pen.ratio, look);
 }

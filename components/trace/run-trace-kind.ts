@@ -123,5 +123,5 @@ function drawUnits(pen: Pen, read: Reader): void {
   const { ink2, monoFamily } = read.colours();
   const look = { colour: ink2, family: monoFamily, align: "right" } as const;
   writeWords(pen, "%", pen.left - 6 * pen.ratio, pen.top - 6 * pen.ratio, look);
-  writeWords(pen, "min", pen.right, pen.bottom + 18 * pen.ratio, look);
+  writeWords(pen, "min", pen.right, pen.bottom + 15 * pen.ratio, look);
 }

@@ -22,7 +22,7 @@ export function Facts({
     <dl
       className={classNames(
         "grid grid-cols-[auto_1fr] gap-x-3.5 gap-y-0.5 text-small",
-        align === "right" && "text-right",
+        align === "right" && "sm:text-right",
         className,
       )}
     >
