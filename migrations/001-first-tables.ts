@@ -1,4 +1,4 @@
-import type { QueryInterface } from "sequelize";
+import type { QueryInterface, Transaction } from "sequelize";
 
 const statements = [
   `CREATE TABLE people (
@@ -18,8 +18,12 @@ const statements = [
   `CREATE TABLE recipe_versions (
     id TEXT PRIMARY KEY, recipe_id TEXT NOT NULL, version INTEGER NOT NULL, state TEXT NOT NULL, document TEXT NOT NULL,
     model_ids TEXT NOT NULL, changed_by TEXT NOT NULL, changed_at_ms INTEGER NOT NULL, UNIQUE (recipe_id, version))`,
-  `CREATE TRIGGER recipe_versions_released_stay BEFORE UPDATE OF document, version, recipe_id, model_ids ON recipe_versions
+  `CREATE TRIGGER recipe_versions_released_stay
+    BEFORE UPDATE OF id, recipe_id, version, document, model_ids, changed_by, changed_at_ms ON recipe_versions
     WHEN OLD.state <> 'draft' BEGIN SELECT RAISE(ABORT, 'a released recipe version never changes'); END`,
+  `CREATE TRIGGER recipe_versions_no_way_back BEFORE UPDATE OF state ON recipe_versions
+    WHEN OLD.state <> 'draft' AND NEW.state = 'draft'
+    BEGIN SELECT RAISE(ABORT, 'a released recipe version is no draft any more'); END`,
   `CREATE TRIGGER recipe_versions_released_remain BEFORE DELETE ON recipe_versions
     WHEN OLD.state <> 'draft' BEGIN SELECT RAISE(ABORT, 'a released recipe version is never deleted'); END`,
   `CREATE TABLE runs (
@@ -62,10 +66,10 @@ const tables = [
   "people",
 ];
 
-export async function up(queryInterface: QueryInterface): Promise<void> {
-  for (const statement of statements) await queryInterface.sequelize.query(statement);
+export async function up({ sequelize }: QueryInterface, transaction: Transaction): Promise<void> {
+  for (const statement of statements) await sequelize.query(statement, { transaction });
 }
 
-export async function down(queryInterface: QueryInterface): Promise<void> {
-  for (const table of tables) await queryInterface.sequelize.query(`DROP TABLE ${table}`);
+export async function down({ sequelize }: QueryInterface, transaction: Transaction): Promise<void> {
+  for (const table of tables) await sequelize.query(`DROP TABLE ${table}`, { transaction });
 }

@@ -1,43 +1,43 @@
-import { closeSync, existsSync, openSync, readFileSync, rmSync, writeSync } from "node:fs";
+import { existsSync, readFileSync, writeFileSync } from "node:fs";
 import path from "node:path";
+import sqlite3 from "sqlite3";
 import { DataError } from "./data-error";
 
-const LOCK_NAME = "in-use";
+const LOCK_NAME = "in-use.sqlite";
+const OWNER_NAME = "in-use.pid";
 
 /**
- * Marks a data folder as used by this process; the returned function gives it back. A mark that a killed process left
- * is taken over. Throws DataError `database-in-use` while another process lives.
+ * Keeps a data folder for this process until the returned function is called. The mark is a lock that the system holds
+ * on an open file, so it goes when the process does, however it ends, and two starts at one moment can't both have it.
+ * Throws DataError `database-in-use` while another one lives.
  */
-export function takeFolder(dataFolder: string): () => void {
-  const file = path.join(dataFolder, LOCK_NAME);
-  const owner = existsSync(file) ? Number(readFileSync(file, "utf8").split(" ")[0]) : null;
-  if (owner !== null && owner !== process.pid && isAlive(owner, readFileSync(file, "utf8"))) {
-    throw new DataError(
-      "database-in-use",
-      `Another Stepwell (process ${owner}) uses the data folder ${dataFolder}. Stop it first.`,
-    );
-  }
-  rmSync(file, { force: true });
-  const handle = openSync(file, "wx");
-  writeSync(handle, `${process.pid} ${startTicks(process.pid)}`);
-  closeSync(handle);
-  return () => rmSync(file, { force: true });
-}
-
-/** Alive, and the same process as then: numbers are given again, start times are not. */
-function isAlive(pid: number, mark: string): boolean {
+export async function takeFolder(dataFolder: string): Promise<() => Promise<void>> {
+  const lock = await openLock(path.join(dataFolder, LOCK_NAME));
   try {
-    process.kill(pid, 0);
-  } catch {
-    return false;
+    await promised((done) => lock.exec("BEGIN EXCLUSIVE", done));
+  } catch (cause) {
+    await promised((done) => lock.close(done));
+    throw inUse(dataFolder, cause);
   }
-  const ticks = mark.split(" ")[1];
-  return !ticks || ticks === startTicks(pid);
+  writeFileSync(path.join(dataFolder, OWNER_NAME), String(process.pid));
+  return () => promised((done) => lock.close(done));
 }
 
-/** Start time of a process in clock ticks since boot; empty where the system does not tell. */
-function startTicks(pid: number): string {
-  const file = `/proc/${pid}/stat`;
-  if (!existsSync(file)) return "";
-  return readFileSync(file, "utf8").split(") ").at(-1)!.split(" ")[19] ?? "";
+function openLock(file: string): Promise<sqlite3.Database> {
+  return new Promise((resolve, reject) => {
+    const lock = new sqlite3.Database(file, (error) => (error ? reject(error) : resolve(lock)));
+    lock.configure("busyTimeout", 0);
+  });
+}
+
+function inUse(dataFolder: string, cause: unknown): Error {
+  if ((cause as { code?: string }).code !== "SQLITE_BUSY") return cause as Error;
+  const file = path.join(dataFolder, OWNER_NAME);
+  const owner = existsSync(file) ? ` (process ${readFileSync(file, "utf8")})` : "";
+  const message = `Another Stepwell${owner} uses the data folder ${dataFolder}. Stop it first.`;
+  return new DataError("database-in-use", message, { cause });
+}
+
+function promised(act: (done: (error: Error | null) => void) => void): Promise<void> {
+  return new Promise((resolve, reject) => act((error) => (error ? reject(error) : resolve())));
 }
