@@ -4,12 +4,14 @@ import type { Repositories, StoredSession } from "@/lib/data/repositories";
 import type { Person } from "@/lib/schemas/person";
 
 const HOUR_MS = 3_600_000;
-/** A session ends after so long without a request; a page that watches a run asks often enough. */
+/** A shift: a technician who left a run to itself comes back signed in. An open page counts as use. */
 const IDLE_MS = 12 * HOUR_MS;
+/** A page that is never closed watches the longest runs to their end, and no longer than a week. */
 const LONGEST_MS = 7 * 24 * HOUR_MS;
 /** `lastSeenAtMs` is written at most so often. */
 const TOUCH_MS = 60_000;
-const COOKIE_NAME = "stepwell-session";
+/** Lifetime of cookie and seal. */
+const SECONDS = LONGEST_MS / 1000;
 
 export interface SessionsOptions {
   secret: string;
@@ -43,8 +45,7 @@ export class Sessions {
       lastSeenAtMs: now,
       expiresAtMs: now + LONGEST_MS,
     });
-    const sealed = await sealData({ id }, { password: this.options.secret, ttl: LONGEST_MS / 1000 });
-    return this.#cookie(sealed, LONGEST_MS / 1000);
+    return this.#cookie(await sealData({ id }, { password: this.options.secret, ttl: SECONDS }), SECONDS);
   }
 
   /** The valid session of a `Cookie` header, if any. Counts as use. */
@@ -53,6 +54,7 @@ export class Sessions {
     return idHash === null ? null : this.#valid(idHash);
   }
 
+  /** Whether a session found earlier still holds. Counts as use. */
   async isValid(idHash: string): Promise<boolean> {
     return (await this.#valid(idHash)) !== null;
   }
@@ -95,15 +97,28 @@ export class Sessions {
   }
 
   async #idHashOf(cookieHeader: string): Promise<string | null> {
-    const sealed = cookieOf(cookieHeader, COOKIE_NAME);
-    if (!sealed) return null;
-    const { id } = await unsealData<{ id?: string }>(sealed, { password: this.options.secret, ttl: LONGEST_MS / 1000 });
-    return typeof id === "string" ? hashOf(id) : null;
+    const sealed = cookieOf(cookieHeader, this.#cookieName);
+    return sealed === null ? null : this.#unseal(sealed);
+  }
+
+  /** What can't be unsealed was sealed by nobody here. */
+  async #unseal(sealed: string): Promise<string | null> {
+    try {
+      const { id } = await unsealData<{ id?: unknown }>(sealed, { password: this.options.secret, ttl: SECONDS });
+      return typeof id === "string" ? hashOf(id) : null;
+    } catch {
+      return null;
+    }
+  }
+
+  /** Browsers take the prefix only from a secure page, and let no other host set such a cookie. */
+  get #cookieName(): string {
+    return this.options.secureCookies ? "__Host-stepwell-session" : "stepwell-session";
   }
 
   #cookie(value: string, maxAgeSeconds: number): string {
     const secure = this.options.secureCookies ? "; Secure" : "";
-    return `${COOKIE_NAME}=${value}; Path=/; HttpOnly; SameSite=Strict; Max-Age=${maxAgeSeconds}${secure}`;
+    return `${this.#cookieName}=${value}; Path=/; HttpOnly; SameSite=Strict; Max-Age=${maxAgeSeconds}${secure}`;
   }
 }
 
@@ -115,10 +130,15 @@ function hashOf(id: string): string {
   return createHash("sha256").update(id).digest("hex");
 }
 
+/** The value of a cookie, percent signs undone; null when it is missing or written wrongly. */
 function cookieOf(header: string, name: string): string | null {
   const pair = header
     .split(";")
     .map((part) => part.trim())
     .find((part) => part.startsWith(`${name}=`));
-  return pair ? decodeURIComponent(pair.slice(name.length + 1)) : null;
+  try {
+    return pair ? decodeURIComponent(pair.slice(name.length + 1)) : null;
+  } catch {
+    return null;
+  }
 }
