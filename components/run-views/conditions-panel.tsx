@@ -25,7 +25,7 @@ export function ConditionsPanel({ state }: { state: RunState }) {
           { term: "Limits", value: `accuracy statement, edition ${statementEdition}` },
           {
             term: "Standard",
-            value: `${standard.maker} ${standard.model}, ${standard.name}, serial number ${standard.serialNumber}`,
+            value: `${standard.name}, serial number ${standard.serialNumber}`,
           },
           {
             term: "Certificate",

@@ -30,12 +30,15 @@ export function RunRows({ title, rows, empty, right, withStairs = false }: RunRo
               <tr key={run.id}>
                 <td className="w-12 font-mono tabular">{run.number}</td>
                 <td>
-                  <Link href={runPath(run.id)} className="text-ink underline-offset-3 hover:underline">
+                  <Link
+                    href={runPath(run.id)}
+                    className="whitespace-nowrap text-ink underline-offset-3 hover:underline"
+                  >
                     {run.unitName}, {run.assetNumber}
                   </Link>
                 </td>
                 {withStairs && (
-                  <td className="w-48 max-sm:hidden">
+                  <td className="w-40 max-xl:hidden">
                     <StairLine groups={run.stairs} size="small" />
                   </td>
                 )}

@@ -1,11 +1,11 @@
 import { applyRunEvent } from "@/lib/journal/apply-run-event";
 import { readingAt } from "@/lib/journal/columns";
 import { emptyRun, type RunState } from "@/lib/journal/run-state";
-import type { JournalColumns } from "@/lib/schemas/journal-columns";
+import type { JournalColumns, ReadingColumns } from "@/lib/schemas/journal-columns";
 import type { RunEvent } from "@/lib/schemas/run-event";
 
-/** Records between two kept states: a jump folds fewer than this. */
-export const CHECKPOINT_EVERY = 500;
+/** Within a long attempt a state is kept every so many records. */
+export const CHECKPOINT_EVERY = 50;
 
 /** A whole journal in which any moment can be had at once. Moments are numbered by `seq`, 0 before the first record. */
 export interface ReplayTimeline {
@@ -23,33 +23,8 @@ export interface ReplayTimeline {
 
 /** Readings stay in their columns until their turn comes, so that a million of them are not a million objects. */
 export function createTimeline(columns: JournalColumns): ReplayTimeline {
-  const { events, readings } = columns;
-  const lastSeq = events.length + readings.seq.length;
-  const places = placesBySeq(columns, lastSeq);
-  const checkpoints: RunState[] = [emptyRun];
-  let latest: RunState = emptyRun;
-
-  const record = (seq: number): RunEvent => {
-    const place = places[seq - 1];
-    if (place === undefined) throw new RangeError(`the journal has records 1 to ${lastSeq}, not ${seq}`);
-    return place >= 0 ? events[place]! : readingAt(readings, -place - 1);
-  };
-  const elapsedMsAt = (seq: number): number => {
-    const place = seq === 0 ? undefined : places[seq - 1];
-    if (place === undefined) return 0;
-    return place >= 0 ? events[place]!.elapsedMs : readings.elapsedMs[-place - 1]!;
-  };
-  const stateAt = (seq: number): RunState => {
-    const target = Math.min(Math.max(0, Math.floor(seq)), lastSeq);
-    const kept = checkpoints[Math.min(Math.floor(target / CHECKPOINT_EVERY), checkpoints.length - 1)]!;
-    let state = latest.lastSeq <= target && latest.lastSeq > kept.lastSeq ? latest : kept;
-    while (state.lastSeq < target) {
-      state = applyRunEvent(state, record(state.lastSeq + 1));
-      if (state.lastSeq === checkpoints.length * CHECKPOINT_EVERY) checkpoints.push(state);
-    }
-    latest = state;
-    return state;
-  };
+  const { record, elapsedMsAt, lastSeq } = recordsBySeq(columns);
+  const stateAt = stateFinder(attemptStarts(columns), record, lastSeq);
   const seqAt = (elapsedMs: number): number => {
     let low = 0;
     let high = lastSeq;
@@ -63,16 +38,87 @@ export function createTimeline(columns: JournalColumns): ReplayTimeline {
   return { lastSeq, lastElapsedMs: elapsedMsAt(lastSeq), end: stateAt(lastSeq), stateAt, record, elapsedMsAt, seqAt };
 }
 
-/** For each seq from 1: the index of its event, or −1 − the index of its reading. Throws RangeError when a number is missing. */
-function placesBySeq({ events, readings }: JournalColumns, lastSeq: number): Int32Array {
+/** Access to events and readings as one sequence. Throws RangeError when a number is missing or doubled. */
+function recordsBySeq({ events, readings }: JournalColumns) {
+  const lastSeq = events.length + readings.seq.length;
+  /** For each seq from 1: one more than the index of its event, or the negative of that for its reading; 0 for none. */
   const places = new Int32Array(lastSeq);
-  const filled = new Uint8Array(lastSeq);
   const place = (seq: number, at: number) => {
-    if (seq < 1 || seq > lastSeq || filled[seq - 1]) throw new RangeError(`record ${seq} is out of order`);
+    if (places[seq - 1] !== 0) throw new RangeError(`record ${seq} of the journal is doubled, or another is missing`);
     places[seq - 1] = at;
-    filled[seq - 1] = 1;
   };
-  events.forEach((event, index) => place(event.seq, index));
-  readings.seq.forEach((seq, index) => place(seq, -1 - index));
-  return places;
+  events.forEach(({ seq }, index) => place(seq, index + 1));
+  readings.seq.forEach((seq, index) => place(seq, -index - 1));
+
+  const record = (seq: number): RunEvent => {
+    const at = places[seq - 1];
+    if (at === undefined) throw new RangeError(`the journal has records 1 to ${lastSeq}, not ${seq}`);
+    return at > 0 ? events[at - 1]! : readingAt(readings, -at - 1);
+  };
+  const elapsedMsAt = (seq: number): number => {
+    const at = places[seq - 1];
+    if (at === undefined) return 0;
+    return at > 0 ? events[at - 1]!.elapsedMs : readings.elapsedMs[-at - 1]!;
+  };
+  return { record, elapsedMsAt, lastSeq };
+}
+
+/**
+ * The state after each start of an attempt, in order. An attempt begins with nothing measured, so the readings before it
+ * matter only by the voltage that the last of them left on the terminals: all others need no folding.
+ */
+function attemptStarts({ events, readings }: JournalColumns): RunState[] {
+  const starts: RunState[] = [];
+  let state = emptyRun;
+  let firstReading = 0;
+  for (const event of events) {
+    const endReading = firstIndexFrom(readings, firstReading, event.seq);
+    const lastVolts = lastVoltsBetween(readings, firstReading, endReading);
+    if (lastVolts !== null) {
+      const reading = readingAt(readings, lastVolts);
+      state = applyRunEvent({ ...state, active: null, lastSeq: reading.seq - 1 }, reading);
+    }
+    state = applyRunEvent({ ...state, lastSeq: event.seq - 1 }, event);
+    if (event.type === "point.started") starts.push(state);
+    firstReading = endReading;
+  }
+  return starts;
+}
+
+function firstIndexFrom({ seq }: ReadingColumns, from: number, beforeSeq: number): number {
+  let index = from;
+  while (index < seq.length && seq[index]! < beforeSeq) index += 1;
+  return index;
+}
+
+function lastVoltsBetween({ volts }: ReadingColumns, from: number, end: number): number | null {
+  for (let index = end - 1; index >= from; index -= 1) if (volts[index] !== null) return index;
+  return null;
+}
+
+/** Folds from the nearest state known: the start of the attempt, one kept within it, or the one asked for last. */
+function stateFinder(starts: readonly RunState[], record: (seq: number) => RunEvent, lastSeq: number) {
+  const kept = new Map<number, RunState>();
+  let latest: RunState = emptyRun;
+
+  const nearest = (target: number): RunState => {
+    let best = starts.findLast((start) => start.lastSeq <= target) ?? emptyRun;
+    if (latest.lastSeq <= target && latest.lastSeq > best.lastSeq) best = latest;
+    for (let seq = target - (target % CHECKPOINT_EVERY); seq > best.lastSeq; seq -= CHECKPOINT_EVERY) {
+      const state = kept.get(seq);
+      if (state) return state;
+    }
+    return best;
+  };
+
+  return (seq: number): RunState => {
+    const target = Math.min(Math.max(0, Math.floor(seq)), lastSeq);
+    let state = nearest(target);
+    while (state.lastSeq < target) {
+      state = applyRunEvent(state, record(state.lastSeq + 1));
+      if (state.lastSeq % CHECKPOINT_EVERY === 0) kept.set(state.lastSeq, state);
+    }
+    latest = state;
+    return state;
+  };
 }

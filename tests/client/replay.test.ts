@@ -40,12 +40,20 @@ describe("the timeline", () => {
   });
 
   it("agrees with a straight fold across checkpoints, jumped to in any order", () => {
-    const journal = longJournal(3 * CHECKPOINT_EVERY);
+    const journal = longJournal(30 * CHECKPOINT_EVERY);
     const straight = [emptyRun];
     for (const record of journal) straight.push(applyRunEvent(straight.at(-1)!, record));
     const timeline = createTimeline(toColumns(journal));
     const jumps = [journal.length, 3, 501, 500, 499, 1200, 1000, 1001, 7, journal.length - 1, 0, 760, 761];
     for (const seq of jumps) expect(timeline.stateAt(seq)).toEqual(straight[seq]);
+  });
+
+  it("opens the journal of a run that is not over at any length", () => {
+    let straight = emptyRun;
+    for (const record of records) {
+      straight = applyRunEvent(straight, record);
+      expect(createTimeline(toColumns(records.slice(0, record.seq))).end).toEqual(straight);
+    }
   });
 
   it("refuses a journal with a number missing or doubled", () => {

@@ -16,7 +16,7 @@ export default async function BenchesPage() {
       <LiveBenches initial={{ benches, runs }} rights={runRightsOf(person)} canStart={canStart} nowMs={nowMs} />
       <div className="mt-2 grid items-start gap-4 lg:grid-cols-2">
         <RunRows
-          title="Waiting for a decision"
+          title="Points outside: to be looked at"
           rows={outside.rows}
           empty="No finished run has a point outside its limit."
           right={outside.total > 0 && <AllRuns href="/runs?outside=some&status=finished" count={outside.total} />}
