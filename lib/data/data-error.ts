@@ -12,7 +12,3 @@ export class DataError extends Error {
     super(message, options);
   }
 }
-
-export function isDataError(error: unknown): error is DataError {
-  return error instanceof Error && error.name === "DataError" && "code" in error;
-}

@@ -1,6 +1,13 @@
 import { BenchRow, StandardRow, UnitModelRow, UnitRow } from "@/models";
 import { benchSchema } from "@/lib/schemas/bench";
-import { standardSchema, unitModelSchema, unitSchema, type Unit, type UnitModel } from "@/lib/schemas/instrument";
+import {
+  standardSchema,
+  testerPhysicsSchema,
+  unitModelSchema,
+  unitSchema,
+  type Unit,
+  type UnitModel,
+} from "@/lib/schemas/instrument";
 import type { Database } from "./open-database";
 import type { BenchesRepository, StandardsRepository, UnitModelsRepository, UnitsRepository } from "./repositories";
 
@@ -15,24 +22,28 @@ export function createUnitModelsRepository(database: Database): UnitModelsReposi
 }
 
 async function listModels(): Promise<UnitModel[]> {
-  return (await UnitModelRow.findAll({ order: [["id", "ASC"]] })).map((row) =>
-    unitModelSchema.parse(JSON.parse(row.document)),
-  );
+  return (await UnitModelRow.findAll({ order: [["id", "ASC"]] })).map(toModel);
+}
+
+function toModel(row: UnitModelRow): UnitModel {
+  return unitModelSchema.parse(JSON.parse(row.document));
 }
 
 export function createUnitsRepository(database: Database): UnitsRepository {
-  const listAll = async (): Promise<Unit[]> => {
-    const [rows, models] = await Promise.all([UnitRow.findAll({ order: [["assetNumber", "ASC"]] }), listModels()]);
-    const modelById = new Map(models.map((model) => [model.id, model]));
-    return rows.map((row) => toUnit(row, modelById.get(row.modelId)));
-  };
   return {
     list: async (search) => {
       const wanted = search.trim().toLowerCase();
-      const units = await listAll();
-      return wanted === "" ? units : units.filter((unit) => unitWords(unit).includes(wanted));
+      const [rows, models] = await Promise.all([UnitRow.findAll({ order: [["assetNumber", "ASC"]] }), listModels()]);
+      const modelById = new Map(models.map((model) => [model.id, model]));
+      const units = rows.map((row) => toUnit(row, modelById.get(row.modelId)!));
+      return units.filter((unit) => unitWords(unit).includes(wanted));
     },
-    get: async (id) => (await listAll()).find((unit) => unit.id === id) ?? null,
+    get: async (id) => {
+      const row = await UnitRow.findByPk(id);
+      if (!row) return null;
+      const model = await UnitModelRow.findByPk(row.modelId, { rejectOnEmpty: true });
+      return toUnit(row, toModel(model));
+    },
     create: async (unit) => {
       const { model, simulation, ...rest } = unitSchema.parse(unit);
       const row = { ...rest, modelId: model.id, simulation: simulation && JSON.stringify(simulation) };
@@ -41,15 +52,9 @@ export function createUnitsRepository(database: Database): UnitsRepository {
   };
 }
 
-function toUnit(row: UnitRow, model: UnitModel | undefined): Unit {
-  const simulation: unknown = row.simulation === null ? null : JSON.parse(row.simulation);
-  return unitSchema.parse({
-    id: row.id,
-    model,
-    serialNumber: row.serialNumber,
-    assetNumber: row.assetNumber,
-    simulation,
-  });
+function toUnit({ id, serialNumber, assetNumber, simulation }: UnitRow, model: UnitModel): Unit {
+  const physics = simulation === null ? null : testerPhysicsSchema.parse(JSON.parse(simulation));
+  return { id, model, serialNumber, assetNumber, simulation: physics };
 }
 
 function unitWords({ assetNumber, serialNumber, model }: Unit): string {

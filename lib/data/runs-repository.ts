@@ -57,9 +57,14 @@ async function reserve(
       return row.number;
     });
   } catch (error) {
-    if (!(error instanceof UniqueConstraintError)) throw error;
+    if (!isBenchTaken(error)) throw error;
     throw new DataError("bench-taken", "Another run is on this bench already.", { cause: error });
   }
+}
+
+/** The index runs_one_active_per_bench speaks of its one column. */
+function isBenchTaken(error: unknown): boolean {
+  return error instanceof UniqueConstraintError && error.errors.some(({ path }) => path === "bench_id");
 }
 
 const emptyProjection = {

@@ -58,19 +58,24 @@ export const demoRecipes: readonly SaveRecipe[] = [
   ),
   recipe(
     "Quick check",
-    "Six points before a unit leaves for the field.",
+    "Nine points before a unit leaves for the field.",
     ["pellham-ir-10", "aldgrove-m5", "sorrel-k2"],
     {
       nominalOhms: [1e6, 100e6, 1e9],
-      testVolts: [250, 500],
+      testVolts: [250, 500, 1000],
       settling: { kind: "fixed", waitSeconds: 3 },
       readingsPerPoint: 3,
     },
   ),
-  recipe("Low range, 250 V and 500 V", "What the small box can do, for the cold room.", ["sorrel-k2", "aldgrove-m5"], {
-    nominalOhms: [100e3, 500e3, 1e6, 5e6, 10e6, 50e6],
-    testVolts: [250, 500],
-    settling: { kind: "scaled", baseSeconds: 4, timeConstants: 7 },
-    readingsPerPoint: 3,
-  }),
+  recipe(
+    "Low range, 250 V and 500 V",
+    "The lower half of the small testers, with a wait that grows with the resistance.",
+    ["sorrel-k2", "aldgrove-m5"],
+    {
+      nominalOhms: [100e3, 500e3, 1e6, 5e6, 10e6, 50e6],
+      testVolts: [250, 500],
+      settling: { kind: "scaled", baseSeconds: 4, timeConstants: 7 },
+      readingsPerPoint: 3,
+    },
+  ),
 ];

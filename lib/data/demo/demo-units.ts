@@ -14,8 +14,14 @@ const wideRanges = [
 ];
 
 function row(fromOhms: number, toOhms: number, percentOfReading: number, digits: number, percentPerGigaohm: number) {
-  return { testVolts: [], fromOhms, toOhms, percentOfReading, digits, percentPerGigaohm };
+  return { testVolts: [] as number[], fromOhms, toOhms, percentOfReading, digits, percentPerGigaohm };
 }
+
+/** The statement grows with resistance, and the more so the lower the test voltage: 3 % + 9 %/GΩ divided by the volts. */
+const growingRows = [50, 100, 250, 500, 1000].map((testVolts) => ({
+  ...row(1e9, 100e9, 3, 0, 9 / testVolts),
+  testVolts: [testVolts],
+}));
 
 /** The models that the workshop serves, with their makers' statements. */
 export const demoModels: readonly UnitModel[] = [
@@ -25,7 +31,7 @@ export const demoModels: readonly UnitModel[] = [
     model: "IR-10",
     testVolts: [50, 100, 250, 500, 1000],
     ranges: wideRanges,
-    accuracy: [row(10e3, 1e9, 2, 2, 0), row(1e9, 10e9, 3, 2, 0), row(10e9, 100e9, 3, 0, 0.08)],
+    accuracy: [row(10e3, 1e9, 2, 2, 0), ...growingRows],
     statementEdition: "2025",
     openCircuitFactor: 1.2,
     shortCircuitAmperes: 0.002,
@@ -85,7 +91,7 @@ const units: readonly UnitData[] = [
     assetNumber: "TW-0377",
     modelId: "aldgrove-m5",
     serialNumber: "A5-30290",
-    fault: { leakageSiemens: 1 / 240e9, gainError: 0.004 },
+    fault: { leakageSiemens: 1 / 150e9, gainError: 0.004 },
   },
   { assetNumber: "TW-0398", modelId: "pellham-ir-10", serialNumber: "P10-4471", fault: { gainError: -0.002 } },
   { assetNumber: "TW-0409", modelId: "pellham-ir-10", serialNumber: "P10-4502", fault: { offsetAmperes: 0.32e-9 } },
@@ -102,7 +108,7 @@ const units: readonly UnitData[] = [
     fault: { gainError: 0.018, noise: 1.5e-3 },
   },
   { assetNumber: "TW-0433", modelId: "sorrel-k2", serialNumber: "K2-0081", fault: {} },
-  { assetNumber: "TW-0440", modelId: "sorrel-k2", serialNumber: "K2-0096", fault: { leakageSiemens: 1 / 60e9 } },
+  { assetNumber: "TW-0440", modelId: "sorrel-k2", serialNumber: "K2-0096", fault: { leakageSiemens: 1 / 12e9 } },
 ];
 
 /** The testers of the workshop: sound ones, leaky ones, one with an offset current, one noisy. */

@@ -11,16 +11,34 @@ export interface LayDemoInput {
   nowMs: number;
 }
 
-/** Lays the demo laboratory's people, instruments, benches and recipes in an empty database. */
+/**
+ * Lays the demo laboratory's instruments, benches, recipes and people in an empty database. People come last: while
+ * there is none, a start that was cut off is taken up again, and what it had laid is left as it is.
+ */
 export async function layDemoRegister({ repositories, hashPassword, nowMs }: LayDemoInput): Promise<void> {
   const passwordHash = await hashPassword(DEMO_PASSWORD);
-  await repositories.siteSettings.set("site.name", demoSite.name);
-  await repositories.siteSettings.set("site.place", demoSite.place);
-  for (const person of demoPeople) await repositories.people.create(person, passwordHash);
-  for (const model of demoModels) await repositories.unitModels.create(model);
-  for (const unit of demoUnits()) await repositories.units.create(unit);
-  const standards = demoStandards(nowMs);
-  for (const standard of standards) await repositories.standards.create(standard);
-  for (const [position, bench] of demoBenches(standards).entries()) await repositories.benches.create(bench, position);
-  for (const recipe of demoRecipes) await repositories.recipes.create(recipe, "Tomas Reyl");
+  const { siteSettings, unitModels, units, standards, benches, recipes, people } = repositories;
+  await siteSettings.set("site.name", demoSite.name);
+  await siteSettings.set("site.place", demoSite.place);
+  await layMissing(demoModels, await unitModels.list(), idOf, unitModels.create);
+  await layMissing(demoUnits(), await units.list(""), idOf, units.create);
+  await layMissing(demoStandards(nowMs), await standards.list(), idOf, standards.create);
+  const demo = demoBenches(await standards.list());
+  await layMissing(demo, await benches.list(), idOf, (bench) => benches.create(bench, demo.indexOf(bench)));
+  await layMissing(demoRecipes, await recipes.list(), nameOf, (recipe) => recipes.create(recipe, "Tomas Reyl"));
+  for (const person of demoPeople) await people.create(person, passwordHash);
 }
+
+/** Lays those that are not there yet, told apart by their key. */
+async function layMissing<T extends K, K>(
+  wanted: readonly T[],
+  present: readonly K[],
+  keyOf: (item: K) => string,
+  lay: (item: T) => Promise<unknown>,
+): Promise<void> {
+  const known = new Set(present.map(keyOf));
+  for (const item of wanted) if (!known.has(keyOf(item))) await lay(item);
+}
+
+const idOf = ({ id }: { id: string }) => id;
+const nameOf = ({ document }: { document: { name: string } }) => document.name;
