@@ -4,14 +4,16 @@ import type { ChartColours } from "./chart-colours";
 interface AxisLook {
   colours: () => ChartColours;
   size: number;
+  /** Least distance of two ticks in CSS pixels. */
   space?: number;
+  incrs?: uPlot.Axis.Incrs;
   splits?: uPlot.Axis.Splits;
   values: uPlot.Axis.Values;
 }
 
 /** One axis in our look: hairlines of the grid, figures in the mono face, no ticks. */
 export function axis(
-  { colours, size, space, splits, values }: AxisLook,
+  { colours, size, space = 60, incrs, splits, values }: AxisLook,
   side: "bottom" | "left",
   grid: boolean,
 ): uPlot.Axis {
@@ -20,7 +22,8 @@ export function axis(
     size,
     gap: 6,
     space,
-    splits,
+    ...(incrs && { incrs }),
+    ...(splits && { splits }),
     values,
     // A logarithmic axis would otherwise drop the ticks that it did not choose by itself.
     filter: (_, chosen) => chosen,

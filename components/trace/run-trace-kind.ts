@@ -3,6 +3,8 @@ import { formatErrorPercent } from "@/lib/units/format";
 import { axis, decimalsOf, timeCeiling } from "@/components/chart/axes";
 import type { ChartColours } from "@/components/chart/chart-colours";
 import { arrow, ring, strokePath, withPen, writeWords, type Pen } from "@/components/chart/draw";
+import { drawZero, errorY, vertical, writeBeyond, writePercent } from "@/components/chart/percent-marks";
+import { percentRange, percentReach } from "@/components/chart/percent-range";
 import type { PlotKind, PlotReader } from "@/components/chart/plot";
 import type { RunTracePoint } from "./run-trace";
 
@@ -12,16 +14,22 @@ type Reader = PlotReader<readonly RunTracePoint[]>;
 export const runTraceKind: PlotKind<readonly RunTracePoint[]> = {
   data: (points) => [points.map((point) => point.elapsedSeconds), points.map((point) => point.errorPercent)],
   options: (read) => ({
-    padding: [18, 12, 0, 0],
+    padding: [24, 12, 0, 0],
     legend: { show: false },
     cursor: { show: false },
     scales: {
       x: { time: false, range: () => [0, timeCeiling(read.frame().at(-1)?.elapsedSeconds ?? 0)] },
-      y: { range: () => errorRange(read.frame()) },
+      y: { range: () => percentRange(read.frame()) },
     },
     axes: [
       axis(
-        { colours: read.colours, size: 28, space: 70, values: (_, splits) => splits.map(minutesOf) },
+        {
+          colours: read.colours,
+          size: 28,
+          space: 70,
+          incrs: WHOLE_TIMES,
+          values: (_, splits) => splits.map(minutesOf),
+        },
         "bottom",
         false,
       ),
@@ -43,18 +51,8 @@ export const runTraceKind: PlotKind<readonly RunTracePoint[]> = {
   }),
 };
 
-/** All errors and limits, zero among them. */
-function errorRange(points: readonly RunTracePoint[]): [number, number] {
-  const values = points.flatMap(({ errorPercent, limitPercent }) => [
-    errorPercent ?? 0,
-    limitPercent ?? 0,
-    -(limitPercent ?? 0),
-  ]);
-  const low = Math.min(-1, ...values);
-  const high = Math.max(1, ...values);
-  const pad = 0.06 * (high - low);
-  return [low - pad, high + pad];
-}
+/** Ticks at whole seconds or minutes. */
+const WHOLE_TIMES = [6, 15, 30, 60, 120, 300, 600, 1200, 1800, 3600, 7200, 14400, 36000];
 
 function minutesOf(seconds: number): string {
   return String(Math.round((seconds / 60) * 100) / 100);
@@ -62,33 +60,27 @@ function minutesOf(seconds: number): string {
 
 function drawPoints(pen: Pen, read: Reader): void {
   const colours = read.colours();
-  strokePath(
-    pen,
-    [
-      [pen.left, pen.y(0)],
-      [pen.right, pen.y(0)],
-    ],
-    { colour: colours.lineStrong, width: 1 },
-  );
-  for (const point of read.frame()) {
-    const x = pen.x(point.elapsedSeconds);
-    if (point.limitPercent !== null) {
-      strokePath(
-        pen,
-        [
-          [x, pen.y(point.limitPercent)],
-          [x, pen.y(-point.limitPercent)],
-        ],
-        { colour: colours.moss, width: 3, dash: [] },
-      );
-    }
-    if (point.errorPercent !== null) drawMark(pen, x, point.errorPercent, point.verdict, colours);
+  const points = read.frame();
+  const reach = percentReach(points);
+  for (const { elapsedSeconds, limitPercent } of points) {
+    if (limitPercent === null) continue;
+    const x = pen.x(elapsedSeconds);
+    strokePath(pen, vertical(x, pen.y(limitPercent), pen.y(-limitPercent)), { colour: colours.mossTint, width: 7 });
   }
+  drawZero(pen, colours);
+  for (const { elapsedSeconds, errorPercent, verdict } of points) {
+    if (errorPercent === null) continue;
+    const side = errorPercent < 0 ? "down" : "up";
+    drawMark(pen, pen.x(elapsedSeconds), errorY(pen, errorPercent, reach), side, verdict, colours);
+  }
+  const errors = points.flatMap(({ elapsedSeconds, errorPercent }) =>
+    errorPercent === null ? [] : [{ x: pen.x(elapsedSeconds), percent: errorPercent }],
+  );
+  writeBeyond(pen, errors, reach, colours);
 }
 
 /** Each verdict has a shape of its own: filled, ringed, an arrowhead, a cross. */
-function drawMark(pen: Pen, x: number, errorPercent: number, verdict: Verdict, colours: ChartColours): void {
-  const y = pen.y(errorPercent);
+function drawMark(pen: Pen, x: number, y: number, side: "up" | "down", verdict: Verdict, colours: ChartColours): void {
   const reach = 4 * pen.ratio;
   switch (verdict) {
     case "inside":
@@ -96,7 +88,7 @@ function drawMark(pen: Pen, x: number, errorPercent: number, verdict: Verdict, c
     case "doubtful":
       return ring(pen, x, y, 3.6, colours.ochre, colours.panel, 2);
     case "outside":
-      return arrow(pen, x, y, errorPercent < 0 ? "down" : "up", colours.brick);
+      return arrow(pen, x, y, side, colours.brick);
     case "unsettled":
       strokePath(
         pen,
@@ -120,8 +112,11 @@ function drawMark(pen: Pen, x: number, errorPercent: number, verdict: Verdict, c
 }
 
 function drawUnits(pen: Pen, read: Reader): void {
-  const { ink2, monoFamily } = read.colours();
-  const look = { colour: ink2, family: monoFamily, align: "right" } as const;
-  writeWords(pen, "%", pen.left - 6 * pen.ratio, pen.top - 6 * pen.ratio, look);
-  writeWords(pen, "min", pen.right, pen.bottom + 15 * pen.ratio, look);
+  const colours = read.colours();
+  writePercent(pen, colours);
+  writeWords(pen, "min", pen.right, pen.bottom + 15 * pen.ratio, {
+    colour: colours.ink2,
+    family: colours.monoFamily,
+    align: "right",
+  });
 }
