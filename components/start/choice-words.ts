@@ -1,10 +1,9 @@
 import type { Unit } from "@/lib/schemas/instrument";
-import type { ExcludedPoint, Plan } from "@/lib/schemas/plan";
+import type { Plan } from "@/lib/schemas/plan";
 import type { RecipeVersion } from "@/lib/schemas/recipe";
 import { endedStatuses, type RunSummary } from "@/lib/schemas/run";
 import type { RunCondition } from "@/lib/schemas/run-event";
-import { formatDuration, formatTestVolts } from "@/lib/units/format";
-import { shortOhms, listWords } from "@/components/recipe/recipe-words";
+import { formatDuration } from "@/lib/units/format";
 import { countsInWords } from "@/components/runs-list/run-words";
 
 /** A unit that ran within so many days has probably not been away. */
@@ -41,34 +40,13 @@ export function proposedCondition(lastRun: RunSummary | null, nowMs: number): Ru
   return isRecent ? "as-left" : "as-found";
 }
 
-/** `62 points, about 41 min`, and what that is on the wall when the bench's time runs faster. */
+/** `62 points, about 41 min`, and what that is by the wall clock when the bench's time runs faster. */
 export function forecastWords(plan: Plan, clockSpeed: number): string {
   const { length } = plan.points;
   const seconds = plan.points.reduce((sum, point) => sum + point.forecastSeconds, 0);
   const count = length === 1 ? "1 point" : `${length} points`;
-  const quick = clockSpeed > 1 ? `, here in ${formatDuration(seconds / clockSpeed)}` : "";
+  const quick = clockSpeed > 1 ? `, at ${clockSpeed}× about ${formatDuration(seconds / clockSpeed)}` : "";
   return length === 0 ? "no point can be run" : `${count}, about ${formatDuration(seconds)}${quick}`;
-}
-
-export interface ExcludedGroup {
-  reason: string;
-  /** `50 GΩ and 90 GΩ at 50 V`. */
-  cells: string;
-  count: number;
-}
-
-/** Points that will not be run, by reason and test voltage. */
-export function excludedGroups(excluded: readonly ExcludedPoint[]): ExcludedGroup[] {
-  const groups = new Map<string, ExcludedPoint[]>();
-  for (const point of excluded) {
-    const key = `${point.testVolts} ${point.reason}`;
-    groups.set(key, [...(groups.get(key) ?? []), point]);
-  }
-  return [...groups.values()].map((points) => ({
-    reason: points[0]!.reason,
-    cells: `${listWords(points.map(({ nominalOhms }) => shortOhms(nominalOhms)))} at ${formatTestVolts(points[0]!.testVolts)}`,
-    count: points.length,
-  }));
 }
 
 export interface SortedRecipes {

@@ -3,8 +3,9 @@
 import type { Unit } from "@/lib/schemas/instrument";
 import type { Plan } from "@/lib/schemas/plan";
 import type { RecipeVersion } from "@/lib/schemas/recipe";
+import { excludedGroups } from "@/components/recipe/excluded-groups";
 import { countPoints } from "@/components/recipe/recipe-form";
-import { excludedGroups, forecastWords, recipesFor, recipeWords } from "./choice-words";
+import { forecastWords, recipesFor, recipeWords } from "./choice-words";
 import { SearchChoice } from "./search-choice";
 
 interface RecipeChoiceProps {

@@ -1,12 +1,6 @@
 import { describe, expect, it } from "vitest";
-import {
-  excludedGroups,
-  forecastWords,
-  lastRunOf,
-  lastRunWords,
-  proposedCondition,
-  recipesFor,
-} from "@/components/start/choice-words";
+import { excludedGroups } from "@/components/recipe/excluded-groups";
+import { forecastWords, lastRunOf, lastRunWords, proposedCondition, recipesFor } from "@/components/start/choice-words";
 import { demoBenches } from "@/lib/data/demo/demo-benches";
 import { demoRecipes } from "@/lib/data/demo/demo-recipes";
 import { demoStandards } from "@/lib/data/demo/demo-standards";
@@ -81,7 +75,7 @@ describe("the choice of a recipe", () => {
     expect(forecastWords(plan, 1)).toMatch(
       new RegExp(`^${points} points, about ${Math.round(seconds / 60)}\u2009min$`, "u"),
     );
-    expect(forecastWords(plan, 60)).toMatch(/, here in \d+\u2009s$/u);
+    expect(forecastWords(plan, 60)).toMatch(/, at 60× about \d+\u2009s$/u);
     expect(forecastWords({ points: [], excluded: [] }, 60)).toBe("no point can be run");
   });
 
@@ -93,6 +87,11 @@ describe("the choice of a recipe", () => {
       cells: "50\u2009GΩ and 90\u2009GΩ at 50\u2009V",
       count: 2,
     });
+    const cold = demoBenches(demoStandards(nowMs))[2]!;
+    const onCold = planRun({ document: demoRecipes[0]!.document, bench: cold, model: unit.model, room });
+    expect(excludedGroups(onCold.excluded).map(({ cells }) => cells.replaceAll("\u2009", " "))).toContain(
+      "500 MΩ at 50 V, 100 V, 250 V, 500 V and 1000 V",
+    );
     expect(groups.reduce((sum, { count }) => sum + count, 0)).toBe(plan.excluded.length);
   });
 });

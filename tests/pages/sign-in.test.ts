@@ -8,7 +8,7 @@ describe("the demo laboratory on the sign-in page", () => {
   it("names the password that the laboratory was laid with", () => expect(DEMO_PASSWORD).toBe(LAID_PASSWORD));
 
   it("names everyone's role and short name", () => {
-    const people = demoPeople.map((person, index) => ({ ...person, id: String(index) }));
+    const people = demoPeople.toReversed().map((person, index) => ({ ...person, id: String(index) }));
     expect(demoAccounts(people).map(({ role, shortName }) => `${role} ${shortName}`)).toEqual([
       "technician ines.marlow",
       "engineer tomas.reyl",

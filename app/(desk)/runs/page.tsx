@@ -12,7 +12,6 @@ import {
 import { RunsTable } from "@/components/runs-list/runs-table";
 import { Button } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
-import { Pagination } from "@/components/ui/pagination";
 import { can } from "@/lib/auth/permissions";
 import { endedStatuses, runQuerySchema } from "@/lib/schemas/run";
 import { requirePerson } from "@/lib/server/page-guard";
@@ -25,7 +24,6 @@ export default async function RunsPage({ searchParams }: { searchParams: Promise
   const query = readRunQuery(await searchParams);
   const { repositories } = getServices();
   const [{ rows, total }, benches] = await Promise.all([repositories.runs.query(query), repositories.benches.list()]);
-  const { first, last, pages } = pageSpan(query, total);
   const hasActive = rows.some(({ status }) => !endedStatuses.includes(status));
   return (
     <PageFrame>
@@ -34,12 +32,7 @@ export default async function RunsPage({ searchParams }: { searchParams: Promise
       {rows.length > 0 ? (
         <section aria-label="Runs" className="rounded border border-line bg-panel">
           <RunsTable rows={rows} query={query} />
-          <Pagination
-            page={query.page}
-            pages={pages}
-            summary={total === 1 ? "1 run" : `Runs ${first} to ${last} of ${total}`}
-            hrefFor={(page) => runQueryPath(query, { page })}
-          />
+          <RunPager query={query} total={total} />
         </section>
       ) : (
         <section aria-label="Runs" className="rounded border border-line bg-panel">
