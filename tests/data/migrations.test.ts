@@ -75,7 +75,7 @@ describe("a migrated database", () => {
     await migrator().up();
     initModels(sequelize);
     for (const model of models) {
-      const declared = Object.values(model.getAttributes()).map(({ field }) => field);
+      const declared = Object.values(model.rawAttributes).map(({ field }) => field);
       expect(await listColumns(model.tableName), model.tableName).toEqual(declared.sort());
     }
   });

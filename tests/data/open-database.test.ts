@@ -1,6 +1,6 @@
 import { writeFileSync } from "node:fs";
 import path from "node:path";
-import { QueryTypes, Transaction } from "sequelize";
+import { QueryTypes, type Transaction } from "sequelize";
 import { afterEach, beforeEach, describe, expect, it } from "vitest";
 import { requireNewEnough } from "@/lib/data/check-database";
 import { openDatabase } from "@/lib/data/open-database";
