@@ -40,8 +40,9 @@ export function BenchBand(props: BenchBandProps) {
       <div
         className={classNames(
           "grid items-start gap-x-6 gap-y-3 py-3.5 pr-4.5",
-          // The hatch takes its width from the first column, so that the bands' columns stand under each other.
-          isHazardous
+          // The hatch takes its width from the first column, so that the bands' columns stand under each other; it keeps
+          // its room while a run goes on, so that nothing moves as the output goes on and off.
+          isHazardous || run !== null
             ? "pl-8 lg:grid-cols-[16.125rem_minmax(0,1fr)_15rem]"
             : "pl-4.5 lg:grid-cols-[17rem_minmax(0,1fr)_15rem]",
         )}

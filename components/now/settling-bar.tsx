@@ -11,7 +11,8 @@ export function SettlingBar({ progress, sentence }: SettlingBarProps) {
   return (
     <div>
       <div className="flex items-end justify-between gap-4 text-label text-ink-2">
-        <p className="min-h-4">{sentence}</p>
+        {/* Room for two lines, so that nothing below moves as the sentence changes. */}
+        <p className="flex min-h-8 items-end">{sentence}</p>
         <span aria-hidden="true" className="flex-none font-mono tabular">
           {percent} %
         </span>

@@ -20,6 +20,8 @@ import { MatrixPanel } from "./matrix-panel";
 import { OutputLine } from "./output-line";
 import { OutsideSoFar } from "./outside-so-far";
 import { PageFrame } from "./page-frame";
+import { PhoneHead } from "./phone-head";
+import { PhoneNow } from "./phone-now";
 import { RunCommands } from "./run-commands";
 import { liveCrumbs, runPath } from "./run-links";
 import { RunNotices } from "./run-notices";
@@ -46,6 +48,7 @@ export function LiveRun({ runId, initial, bench, rights, nowMs }: LiveRunProps) 
   const allowed = useRunKeys(state, rights, commands);
   const stale = contact.staleSinceMs !== null || contact.refusal !== null;
   const over = isOver(state.status);
+  const times = over ? null : runTimes(state, now);
   return (
     <>
       <OutputLine output={state.output} benchName={state.setup?.bench.name ?? "the bench"} />
@@ -54,24 +57,27 @@ export function LiveRun({ runId, initial, bench, rights, nowMs }: LiveRunProps) 
           {announcement(state)}
         </p>
         <StaleBanner sinceMs={contact.staleSinceMs} refusal={contact.refusal} />
-        <RunHead
-          crumbs={liveCrumbs(state)}
-          title={unitTitle(state)}
-          sentence={stateSentence(state)}
-          times={over ? null : runTimes(state, now)}
-          commands={
-            over ? (
-              <RunPages runId={runId} here={null} />
-            ) : (
-              <div className="grid justify-items-end gap-1 max-sm:hidden">
-                <div className="flex gap-2">
-                  <RunCommands state={state} rights={rights} commands={commands} />
+        <PhoneHead state={state} times={times} />
+        <div className="max-sm:hidden">
+          <RunHead
+            crumbs={liveCrumbs(state)}
+            title={unitTitle(state)}
+            sentence={stateSentence(state)}
+            times={times}
+            commands={
+              over ? (
+                <RunPages runId={runId} here={null} />
+              ) : (
+                <div className="grid justify-items-end gap-1">
+                  <div className="flex gap-2">
+                    <RunCommands state={state} rights={rights} commands={commands} />
+                  </div>
+                  <p className="text-label text-ink-2">{keyWords(allowed)}</p>
                 </div>
-                <p className="text-label text-ink-2">{keyWords(allowed)}</p>
-              </div>
-            )
-          }
-        />
+              )
+            }
+          />
+        </div>
         <RunNotices
           runId={runId}
           state={state}
@@ -82,8 +88,11 @@ export function LiveRun({ runId, initial, bench, rights, nowMs }: LiveRunProps) 
         <StairLine groups={stairGroups(state)} size="large" className="my-1" />
         <div className="grid items-start gap-3 lg:grid-cols-[minmax(0,1.16fr)_minmax(0,1fr)] lg:gap-4">
           <div className="grid gap-3 lg:order-last">
-            <NowPanel state={state} stale={stale} />
-            <div className="sm:hidden">
+            <div className="max-sm:hidden">
+              <NowPanel state={state} stale={stale} />
+            </div>
+            <div className="grid gap-3 sm:hidden">
+              <PhoneNow state={state} stale={stale} />
               <OutsideSoFar state={state} />
             </div>
             <TracePanel state={state} stale={stale} />

@@ -2,12 +2,29 @@ import { HatchStrip } from "@/components/shell/hatch-strip";
 import type { OutputState } from "@/lib/schemas/bench";
 import { formatTerminalVolts } from "@/lib/units/format";
 
-/** The strip under the bar. It keeps its height while the output is off, so that nothing moves from point to point. */
+/**
+ * The strip under the bar; on a phone a narrow edge, whose words stand in the phone's head. It keeps its height while
+ * the output is off, so that nothing moves from point to point.
+ */
 export function OutputLine({ output, benchName }: { output: OutputState; benchName: string }) {
-  if (output.state !== "off") return <HatchStrip output={output} benchName={benchName} />;
   return (
-    <p className="flex min-h-7.5 items-center bg-sunken px-6 text-label text-ink-2 max-sm:px-4">
-      {`Output off, terminals of ${benchName} ${output.volts === null ? "proven discharged" : `at ${formatTerminalVolts(output.volts)}`}`}
-    </p>
+    <>
+      <div className="min-h-2.5 bg-sunken sm:hidden">
+        <HatchStrip output={output} benchName={benchName} size="edge" />
+      </div>
+      <div className="min-h-7.5 bg-sunken max-sm:hidden">
+        {output.state === "off" ? (
+          <p className="flex min-h-7.5 items-center px-6 text-label text-ink-2">{offWords(output, benchName)}</p>
+        ) : (
+          <HatchStrip output={output} benchName={benchName} />
+        )}
+      </div>
+    </>
   );
+}
+
+function offWords({ volts }: OutputState, benchName: string): string {
+  return volts === null
+    ? `Output off, terminals of ${benchName} discharged`
+    : `Output off, terminals of ${benchName} at ${formatTerminalVolts(volts)}`;
 }

@@ -35,7 +35,7 @@ function Step({ label, target, isOpen, hrefFor, onPage }: StepProps) {
       {label}
     </Button>
   ) : (
-    <Button size="small" disabled={!isOpen} onClick={() => onPage?.(target)}>
+    <Button size="small" disabled={!isOpen} onClick={onPage && (() => onPage(target))}>
       {label}
     </Button>
   );
