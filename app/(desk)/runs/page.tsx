@@ -2,13 +2,8 @@ import type { Metadata } from "next";
 import { PageFrame } from "@/components/run-views/page-frame";
 import { RefreshWhileActive } from "@/components/runs-list/refresh-while-active";
 import { RunFilter } from "@/components/runs-list/run-filter";
-import {
-  isFiltered,
-  pageSpan,
-  readRunQuery,
-  runQueryPath,
-  type SearchParams,
-} from "@/components/runs-list/run-query-url";
+import { isFiltered, readRunQuery, runQueryPath, type SearchParams } from "@/components/runs-list/run-query-url";
+import { RunPager } from "@/components/runs-list/run-pager";
 import { RunsTable } from "@/components/runs-list/runs-table";
 import { Button } from "@/components/ui/button";
 import { EmptyState } from "@/components/ui/empty-state";
