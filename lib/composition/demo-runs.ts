@@ -89,12 +89,12 @@ export const demoRuns: readonly DemoRun[] = [
   {
     benchName: "North bench",
     assetNumber: "TW-0398",
-    recipeName: "Quick check",
+    recipeName: "Five-voltage accuracy",
     condition: "as-found",
     startedBy: ines,
     daysAgo: 33,
     at: [8, 5],
-    stoppedAfterMinutes: 1,
+    stoppedAfterMinutes: 4,
   },
   {
     benchName: "North bench",
