@@ -1,5 +1,6 @@
 import { PersonRow } from "@/models";
 import { personSchema, roleSchema, type Person } from "@/lib/schemas/person";
+import { nullOr } from "./null-or";
 import type { Database } from "./open-database";
 import type { PeopleRepository } from "./repositories";
 
@@ -27,8 +28,4 @@ export function createPeopleRepository(database: Database): PeopleRepository {
 
 function toPerson({ id, email, name, roles, active }: PersonRow): Person {
   return { id, email, name, roles: roleSchema.array().parse(JSON.parse(roles)), active };
-}
-
-export function nullOr<R, T>(row: R | null, map: (row: R) => T): T | null {
-  return row === null ? null : map(row);
 }

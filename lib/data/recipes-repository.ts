@@ -3,8 +3,8 @@ import { RecipeVersionRow } from "@/models";
 import { recipeVersionSchema, type RecipeVersion } from "@/lib/schemas/recipe";
 import { saveRecipeSchema, type SaveRecipe } from "@/lib/schemas/run";
 import { DataError } from "./data-error";
+import { nullOr } from "./null-or";
 import type { Database } from "./open-database";
-import { nullOr } from "./people-repository";
 import type { RecipesRepository } from "./repositories";
 
 export function createRecipesRepository(database: Database): RecipesRepository {

@@ -2,8 +2,8 @@ import { Op, UniqueConstraintError, type Order, type WhereOptions } from "sequel
 import { RunRow } from "@/models";
 import { endedStatuses, runSummarySchema, type RunQuery, type RunSummary } from "@/lib/schemas/run";
 import { DataError } from "./data-error";
+import { nullOr } from "./null-or";
 import type { Database } from "./open-database";
-import { nullOr } from "./people-repository";
 import type { RunsRepository } from "./repositories";
 
 const sortColumns: Readonly<Record<RunQuery["sort"], string>> = {

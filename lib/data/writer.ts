@@ -1,3 +1,4 @@
+import { AsyncLocalStorage } from "node:async_hooks";
 import PQueue from "p-queue";
 import { Transaction, type Sequelize } from "sequelize";
 import { dropConnection, execute, openConnection, type Connection } from "./connections";
@@ -12,7 +13,10 @@ interface TransactionState {
 }
 
 export interface Writer {
-  /** Runs `act` in a transaction of its own, begun IMMEDIATE, after all earlier ones. */
+  /**
+   * Runs `act` in a transaction of its own, begun IMMEDIATE, after all earlier ones.
+   * Throws RangeError inside another write, which would wait for it for ever.
+   */
   write<T>(act: (transaction: Transaction) => Promise<T>): Promise<T>;
   /** Resolves when nothing is left to write. */
   idle(): Promise<void>;
@@ -24,6 +28,7 @@ export interface Writer {
  */
 export function createWriter(sequelize: Sequelize): Writer {
   const queue = new PQueue({ concurrency: 1 });
+  const inside = new AsyncLocalStorage<true>();
 
   const runTransaction = async <T>(act: (transaction: Transaction) => Promise<T>): Promise<T> => {
     const connection = await openConnection(sequelize, NAME);
@@ -52,5 +57,11 @@ export function createWriter(sequelize: Sequelize): Writer {
     }
   };
 
-  return { write: (act) => queue.add(() => runTransaction(act)), idle: () => queue.onIdle() };
+  return {
+    write: async (act) => {
+      if (inside.getStore()) throw new RangeError("a write can't begin inside another: hand on its transaction");
+      return queue.add(() => inside.run(true, () => runTransaction(act)));
+    },
+    idle: () => queue.onIdle(),
+  };
 }

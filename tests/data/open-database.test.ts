@@ -90,6 +90,13 @@ describe("writing", () => {
     expect(await opened.rows("SELECT * FROM sessions")).toEqual([]);
   });
 
+  it("refuses a write inside a write, which would wait for itself, and takes the next one", async () => {
+    const { database, repositories } = opened;
+    await expect(database.write(() => repositories.siteSettings.set("a", "1"))).rejects.toThrow(/inside another/u);
+    await repositories.siteSettings.set("a", "2");
+    expect(await repositories.siteSettings.get("a")).toBe("2");
+  });
+
   it("refuses a statement that comes after the end of its transaction", async () => {
     const { database } = opened;
     const ended = await database.write(async (transaction) => transaction);
