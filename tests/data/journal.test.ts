@@ -163,6 +163,28 @@ function offProven(seq: number): RunEventOf<"output.off-proven"> {
   return { ...{ seq, atMs: seq, elapsedMs: seq, type: "output.off-proven" }, data: { terminalVolts: 0.4 } };
 }
 
+describe("a full disk", () => {
+  // SQLite reports a database at its greatest page count as it reports a full disk.
+  const limitPages = (pages: string) =>
+    opened.database.write((transaction) =>
+      opened.database.sequelize.query(`PRAGMA max_page_count = ${pages}`, { transaction }),
+    );
+
+  it("is told, loses nothing acknowledged, and the journal goes on when there is room again", async () => {
+    const batch = (from: number) => Array.from({ length: 500 }, (_, index) => readingRecord(from + index, {}));
+    await journal().append("run", batch(1));
+    const [row] = await opened.rows<{ page_count: number }>("PRAGMA page_count");
+    await limitPages(String(row!.page_count + 4));
+    await expect(journal().append("run", batch(501))).rejects.toThrow(/SQLITE_FULL/u);
+    expect(await journal().lastSeq("run")).toBe(500);
+    expect(await journal().verifyChain("run")).toEqual({ intact: true });
+    await limitPages("1000000");
+    await journal().append("run", batch(501));
+    expect(await journal().verifyChain("run")).toEqual({ intact: true });
+    expect(await journal().lastSeq("run")).toBe(1000);
+  });
+});
+
 describe("the database itself", () => {
   beforeEach(() => journal().append("run", small));
 
