@@ -24,14 +24,17 @@ export function readColours(element: Element): ChartColours {
   return Object.fromEntries(entries) as ChartColours;
 }
 
-/** Calls back when day and night change, by the switch or by the machine. Returns what ends the watching. */
+/** What changes the tokens besides the switch: the machine's day and night, and paper. */
+const MEDIA = ["(prefers-color-scheme: dark)", "print"];
+
+/** Calls back when the tokens change. Returns what ends the watching. */
 export function watchTheme(onChange: () => void): () => void {
   const observer = new MutationObserver(onChange);
   observer.observe(document.documentElement, { attributeFilter: ["data-theme"] });
-  const machine = window.matchMedia("(prefers-color-scheme: dark)");
-  machine.addEventListener("change", onChange);
+  const queries = MEDIA.map((query) => window.matchMedia(query));
+  for (const query of queries) query.addEventListener("change", onChange);
   return () => {
     observer.disconnect();
-    machine.removeEventListener("change", onChange);
+    for (const query of queries) query.removeEventListener("change", onChange);
   };
 }

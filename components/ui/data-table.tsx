@@ -29,13 +29,13 @@ export interface DataTableProps {
   children: ReactNode;
 }
 
-/** Rows of 32 px (26 px when dense); scrolls sideways inside its panel where the screen is narrow. */
+/** Rows of 32 px (26 px when dense); scrolls sideways inside its panel where the screen is narrow. A scroller would hold the head, so there is none where it is wide. */
 export function DataTable({ caption, captionShown = false, dense = false, className, children }: DataTableProps) {
   return (
-    <div className="overflow-x-auto" tabIndex={-1}>
+    <div className="print:overflow-visible max-xl:overflow-x-auto">
       <table
         className={classNames(
-          "w-full border-collapse text-[0.875rem] [&_td]:border-b [&_td]:border-line [&_td]:px-2.5 [&_tbody_th]:border-b [&_tbody_th]:border-line [&_tbody_th]:px-2.5",
+          "w-full border-separate border-spacing-0 text-[0.875rem] [&_td]:border-b [&_td]:border-line [&_td]:px-2.5 [&_tbody_th]:border-b [&_tbody_th]:border-line [&_tbody_th]:px-2.5",
           dense ? "[&_td]:h-6.5 [&_tbody_th]:h-6.5" : "[&_td]:h-8 [&_tbody_th]:h-8",
           className,
         )}
@@ -105,12 +105,20 @@ function HeadLabel<C extends string>({
     "inline-flex items-baseline gap-1 no-underline hover:text-ink hover:underline",
     isSorted ? "text-ink" : "text-ink-2",
   );
-  const content = (
-    <>
-      {column.label}
-      <SortMark direction={isSorted ? sort.direction : null} />
-    </>
-  );
+  const mark = <SortMark direction={isSorted ? sort.direction : null} />;
+  // Before a right-aligned label, so that the label ends where its figures end.
+  const content =
+    column.align === "right" ? (
+      <>
+        {mark}
+        {column.label}
+      </>
+    ) : (
+      <>
+        {column.label}
+        {mark}
+      </>
+    );
   return hrefFor ? (
     <Link href={hrefFor(next)} scroll={false} className={looks}>
       {content}
