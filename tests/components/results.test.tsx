@@ -19,7 +19,9 @@ const table = (view: PointsView = defaultPointsView) =>
 describe("the table of points", () => {
   it("says by aria-sort which column it is sorted by, and which could be", () => {
     const html = table({ filter: "all", sort: { column: "error", direction: "falling" } });
-    const sorts = [...html.matchAll(/<th scope="col" aria-sort="(\w+)"[^>]*><button[^>]*>(?:<svg.*?<\/svg>)?([^<]*)/gu)];
+    const sorts = [
+      ...html.matchAll(/<th scope="col" aria-sort="(\w+)"[^>]*><button[^>]*>(?:<svg.*?<\/svg>)?([^<]*)/gu),
+    ];
     expect(sorts.filter((match) => match[1] === "descending").map((match) => match[2])).toEqual(["Error %"]);
     expect(sorts.filter((match) => match[1] === "none").length).toBeGreaterThan(5);
   });
