@@ -3,11 +3,10 @@ import type { AddressInfo } from "node:net";
 import next from "next";
 import { layDemo } from "@/lib/composition/lay-demo";
 import { openAuth } from "@/lib/composition/open-auth";
+import { openData } from "@/lib/composition/open-data";
 import { openBenches } from "@/lib/composition/open-benches";
 import { openServices } from "@/lib/composition/open-services";
-import { createRepositories } from "@/lib/data/create-repositories";
 import { DEMO_PASSWORD, demoPeople } from "@/lib/data/demo/demo-people";
-import { openDatabase } from "@/lib/data/open-database";
 import { RunFeed } from "@/lib/engine/run-feed";
 import { readConfig } from "@/lib/server/config";
 import { openLog } from "@/lib/server/log";
@@ -22,8 +21,7 @@ const LONGEST_STOP_MS = 10_000;
 const config = readConfig(process.env);
 const log = openLog(config.logLevel);
 
-const database = await openDatabase(config.dataFolder);
-const repositories = createRepositories(database);
+const { database, repositories } = await openData(config.dataFolder);
 const opened = openAuth(repositories, config);
 const feed = new RunFeed();
 const benchDependencies = {

@@ -6,6 +6,7 @@ import { RunFeed } from "@/lib/engine/run-feed";
 import { VirtualClock } from "@/lib/engine/virtual-clock";
 import { demoRuns } from "./demo-runs";
 import { openBench } from "./open-bench";
+import { whileLaying } from "./open-data";
 
 /** Lays the demo laboratory in an empty database: its register, and with `withRuns` its past. */
 export async function layDemo(
@@ -16,8 +17,14 @@ export async function layDemo(
   const { repositories } = dependencies;
   if ((await repositories.people.count()) > 0) return;
   const nowMs = dependencies.nowMs();
-  await layDemoRegister({ repositories, hashPassword: (password) => passwords.hash(password), nowMs });
-  if (!withRuns) return;
+  await whileLaying(repositories, async () => {
+    await layDemoRegister({ repositories, hashPassword: (password) => passwords.hash(password), nowMs });
+    if (withRuns) await layPast(dependencies, nowMs);
+  });
+}
+
+async function layPast(dependencies: RosterDependencies, nowMs: number): Promise<void> {
+  const { repositories } = dependencies;
   await layDemoRuns({
     repositories,
     runs: demoRuns,

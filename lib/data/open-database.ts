@@ -8,7 +8,8 @@ import { takeFolder } from "./folder-lock";
 import { createMigrator } from "./migrator";
 import { createWriter, type Writer } from "./writer";
 
-const FILE_NAME = "stepwell.sqlite";
+/** Name of the database in a data folder; its log files begin with it. */
+export const DATABASE_FILE = "stepwell.sqlite";
 
 export interface Database {
   sequelize: Sequelize;
@@ -24,7 +25,7 @@ export interface Database {
 export async function openDatabase(dataFolder: string): Promise<Database> {
   mkdirSync(dataFolder, { recursive: true, mode: 0o700 });
   const release = await takeFolder(dataFolder);
-  const sequelize = new Sequelize({ dialect: "sqlite", storage: path.join(dataFolder, FILE_NAME), logging: false });
+  const sequelize = new Sequelize({ dialect: "sqlite", storage: path.join(dataFolder, DATABASE_FILE), logging: false });
   setPragmasOnEveryConnection(sequelize);
   const writer = createWriter(sequelize);
   const close = async () => {

@@ -2,7 +2,8 @@ import type { Repositories } from "@/lib/data/repositories";
 import { applyRunEvent } from "@/lib/journal/apply-run-event";
 import { pointName } from "@/lib/journal/describe-event";
 import { emptyRun, type RunState } from "@/lib/journal/run-state";
-import { nextPoint } from "@/lib/journal/selectors";
+import { isOver, nextPoint } from "@/lib/journal/selectors";
+import { summariseRun } from "@/lib/journal/run-summary";
 import type { Trouble } from "@/lib/schemas/run-event";
 import type { BenchManager } from "./bench-manager";
 import type { RunRecorder } from "./run-recorder";
@@ -37,6 +38,9 @@ export async function recoverBench(
     await repositories.runs.forget(runId);
     return null;
   }
+  // The list entry may be behind a journal that was written to its end just before the crash.
+  await repositories.runs.updateSummary(summariseRun(runId, state));
+  if (isOver(state.status)) return null;
   const recorder = manager.adopt(runId, state);
   if (state.status === "running") await tellInterruption(recorder, trouble, manager);
   return { runId };

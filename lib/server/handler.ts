@@ -73,7 +73,11 @@ export async function readJson(request: Request): Promise<unknown> {
   }
 }
 
-const engineStatus: Readonly<Record<string, number>> = {
+/** Status of each refusal of the engine and of stored data. */
+const refusalStatus: Readonly<Record<string, number>> = {
+  "bench-taken": 409,
+  "release-frozen": 409,
+  "unknown-record": 404,
   "bench-busy": 409,
   "not-ready": 409,
   "not-active": 409,
@@ -92,9 +96,9 @@ function errorResponse(error: unknown): Response {
     );
   }
   if (isNamed(error, "ZodError")) return invalidResponse(error as ZodError);
-  if (isNamed(error, "EngineError")) {
+  if (isNamed(error, "EngineError") || isNamed(error, "DataError")) {
     const { code, message } = error as Error & { code: string };
-    return Response.json({ code, message }, { status: engineStatus[code] ?? 409 });
+    return Response.json({ code, message }, { status: refusalStatus[code] ?? 500 });
   }
   getServices().log.error("a request failed", error);
   return Response.json(
