@@ -16,13 +16,17 @@ import { fitStepped } from "./stepped-fit";
 /** A point has arrived when its value lies this near to its expected end (as a fraction), or within half a display step. */
 export const ARRIVED_FRACTION = 0.005;
 /** How sure the fit must be of that. */
-const SURE = 0.95;
+const SURE = 0.97;
 /** Without a fit the display must stand for three times the longest interval between its steps. */
 const HOLD_FACTOR = 3;
 /** An expected end with a larger relative uncertainty is not worth showing. */
 const SHOWN_UNCERTAINTY = 0.2;
+/** The fit looks at the last part of the way, from this far off the present value: what went before may have had another course. */
+const FITTED_PART = 0.2;
+/** But at so many values, as far as there are any. */
+const FITTED_VALUES = 8;
 /** A display this many times coarser than the scatter about the fit is read as plateaus. */
-const COARSE = 2.5;
+const COARSE = 2;
 
 interface Reading {
   values: DisplayValue[];
@@ -79,7 +83,7 @@ function predict(watch: SettlingWatch, values: DisplayValue[], step: number): Ex
   if (shownOhms === 0) return null;
   const tolerance = Math.max(ARRIVED_FRACTION, step / 2);
   const plannedSeconds = watch.timeConstantSeconds;
-  const smooth = fitSmooth({ values, step, tolerance, plannedSeconds });
+  const smooth = fitSmooth({ values: lastPart(values), step, tolerance, plannedSeconds });
   if (!smooth || step < COARSE * smooth.scatter) return smooth;
   const stepped = fitStepped({
     plateaus: plateausOf(values, watch.ranges),
@@ -91,6 +95,12 @@ function predict(watch: SettlingWatch, values: DisplayValue[], step: number): Ex
     plannedSeconds,
   });
   return stepped ?? smooth;
+}
+
+function lastPart(values: readonly DisplayValue[]): readonly DisplayValue[] {
+  const shownOhms = values.at(-1)!.ohms;
+  const before = values.findLastIndex(({ ohms }) => Math.abs(ohms - shownOhms) > FITTED_PART * shownOhms);
+  return values.slice(Math.max(0, Math.min(before + 1, values.length - FITTED_VALUES)));
 }
 
 function missingConditions(

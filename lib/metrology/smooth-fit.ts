@@ -130,7 +130,8 @@ function scatterVariance(solutions: readonly Solution[], count: number, usual: n
 function outlookOf(solution: Solution, variance: number, trace: SmoothTrace): TimeConstantOutlook {
   const { timeConstantSeconds, amplitude, lastDecay, inverse } = solution;
   const residual = -amplitude * lastDecay;
-  const deviation = Math.sqrt(variance * (lastDecay ** 2 * inverse.amplitudeAmplitude + 1 / READINGS_TO_COME));
+  const noise = Math.max(0, variance - trace.step ** 2 / 12);
+  const deviation = Math.sqrt(variance * lastDecay ** 2 * inverse.amplitudeAmplitude + noise / READINGS_TO_COME);
   const { tolerance, plannedSeconds } = trace;
   return {
     timeConstantSeconds,

@@ -1,3 +1,4 @@
+import { clipPolygon, measurePolygon, type Polygon } from "./convex-polygon";
 import {
   joinOutlooks,
   LEAST_SECONDS,
@@ -23,153 +24,97 @@ export interface SteppedTrace {
   plannedSeconds: number;
 }
 
-/** A point (end value, amplitude at the beginning). */
-type Corner = readonly [end: number, amplitude: number];
-
-/** Keeps the corners with a·end + b·amplitude <= c. */
-interface HalfPlane {
-  a: number;
-  b: number;
-  c: number;
+/** Where the trace was at one time: between `least` and `most`, relative to the latest value. */
+interface Gate {
+  seconds: number;
+  least: number;
+  most: number;
 }
 
 const GRID = 20;
 const MOST_PLATEAUS = 12;
-/** How far a plateau's bounds are widened, in display steps: wide while tau is searched for, then ever less. */
-const SLACKS = [0.75, 0.3, 0.1, 0.03];
+/** How far a gate is widened, in display steps: wide while tau is searched for, then less; noise needs the last of it. */
+const SLACKS = [0.75, 0.3, 0.1];
+/** Gates wider than this say nothing worth knowing. */
+const MOST_SLACK = 0.3;
+/** (end, amplitude) of any trace: it begins between nothing and twice its end, which lies within a factor of eight of what is shown. */
+const POSSIBLE: Polygon = [
+  [0.125, -0.125],
+  [8, -8],
+  [8, 8],
+  [0.125, 0.125],
+];
 
 /**
- * What a display that moves in coarse steps says about an exponential: every end value and amplitude that passes
- * through all the plateaus counts the same, for each time constant of a grid that narrows as the bounds are tightened.
+ * What a display that moves in coarse steps says about an exponential end + amplitude · exp(-t/tau): every end and
+ * amplitude that passes through all the plateaus counts the same, for each tau of a grid that narrows as the bounds
+ * are tightened.
  *
- * For a fixed tau the plateaus bound a polygon in (end, amplitude), whose area is the evidence for that tau and whose
- * share within the tolerance is the probability of having arrived. Null when no exponential passes through.
+ * For a fixed tau the plateaus bound a polygon in (end, amplitude); its area is the evidence for that tau, and the share
+ * of it within the tolerance is the probability of having arrived. Null when no exponential passes through.
  */
 export function fitStepped(trace: SteppedTrace): ExponentialOutlook | null {
+  const gates = gatesOf(trace);
   let taus = logSpaced(LEAST_SECONDS, MOST_SECONDS, GRID);
   let found: ExponentialOutlook | null = null;
   for (const slack of SLACKS) {
-    const outlooks = taus.map((tau) => outlookAt(trace, tau, slack * trace.step));
+    const outlooks = taus.map((tau) => outlookAt(trace, gates, tau, slack * trace.step));
     const joined = joinOutlooks(outlooks);
     if (!joined) break;
-    found = joined;
+    if (slack <= MOST_SLACK) found = joined;
     taus = narrowed(outlooks);
   }
   return found;
 }
 
-function outlookAt(trace: SteppedTrace, tau: number, slack: number): TimeConstantOutlook {
-  const polygon = clipAll(possibleBegin(), planesOf(trace, tau, slack));
-  const area = areaOf(polygon);
-  if (area <= 0) return impossible(tau);
-  const [end, amplitude] = centroidOf(polygon, area);
-  const arrived = clipAll(polygon, [
-    { a: 1, b: 0, c: 1 + trace.tolerance + slack },
-    { a: -1, b: 0, c: trace.tolerance + slack - 1 },
-  ]);
-  const residual = -amplitude * Math.exp(-(trace.nowSeconds - trace.fromSeconds) / tau);
+/** The newest plateaus at their beginnings and ends: an exponential that passes there passes between. */
+function gatesOf({ plateaus, fromSeconds, shownOhms }: SteppedTrace): Gate[] {
+  return plateaus.slice(-MOST_PLATEAUS).flatMap((plateau) => {
+    const bounds = { least: plateau.leastOhms / shownOhms, most: plateau.mostOhms / shownOhms };
+    const first = { seconds: plateau.fromSeconds - fromSeconds, ...bounds };
+    if (plateau.toSeconds === plateau.fromSeconds) return [first];
+    return [first, { seconds: plateau.toSeconds - fromSeconds, ...bounds }];
+  });
+}
+
+function outlookAt(trace: SteppedTrace, gates: readonly Gate[], tau: number, slack: number): TimeConstantOutlook {
+  const polygon = passing(gates, tau, slack);
+  const { area, centre } = measurePolygon(polygon);
+  const [end, amplitude] = centre;
   const ends = polygon.map((corner) => corner[0]);
+  const residual = -amplitude * Math.exp(-(trace.nowSeconds - trace.fromSeconds) / tau);
   return {
     timeConstantSeconds: tau,
     logWeight: Math.log(area) + plannedLogBelief(tau, trace.plannedSeconds),
     end,
-    endVariance: (Math.max(...ends) - Math.min(...ends)) ** 2 / 18,
-    arrivedProbability: areaOf(arrived) / area,
+    // Standard deviation of a triangular distribution over the same width (JCGM 100:2008, 4.3.9).
+    endVariance: area > 0 ? (Math.max(...ends) - Math.min(...ends)) ** 2 / 24 : 0,
+    arrivedProbability: area > 0 ? arrivedArea(polygon, trace.tolerance + slack) / area : 0,
     minuteMovement: residual * (1 - Math.exp(-60 / tau)),
   };
 }
 
-function impossible(tau: number): TimeConstantOutlook {
-  return {
-    timeConstantSeconds: tau,
-    logWeight: -Infinity,
-    end: 1,
-    endVariance: 0,
-    arrivedProbability: 0,
-    minuteMovement: 0,
-  };
-}
-
-/** Where a trace may begin: between nothing and twice its end, which lies within a factor of eight of what is shown. */
-function possibleBegin(): Corner[] {
-  return [
-    [0.125, -0.125],
-    [8, -8],
-    [8, 8],
-    [0.125, 0.125],
-  ];
-}
-
-function planesOf(trace: SteppedTrace, tau: number, slack: number): HalfPlane[] {
-  return trace.plateaus.slice(-MOST_PLATEAUS).flatMap(({ fromSeconds, toSeconds, leastOhms, mostOhms }) => {
-    const least = leastOhms / trace.shownOhms - slack;
-    const most = mostOhms / trace.shownOhms + slack;
-    const times = fromSeconds === toSeconds ? [fromSeconds] : [fromSeconds, toSeconds];
-    return times.flatMap((seconds) => {
-      const decay = Math.exp(-(seconds - trace.fromSeconds) / tau);
-      return [
-        { a: 1, b: decay, c: most },
-        { a: -1, b: -decay, c: -least },
-      ];
-    });
-  });
-}
-
-function clipAll(polygon: readonly Corner[], planes: readonly HalfPlane[]): readonly Corner[] {
-  let left = polygon;
-  for (const plane of planes) {
-    if (left.length === 0) break;
-    left = clip(left, plane);
+/** All (end, amplitude) whose exponential passes through the gates. */
+function passing(gates: readonly Gate[], tau: number, slack: number): Polygon {
+  let polygon = POSSIBLE;
+  for (let index = gates.length - 1; index >= 0 && polygon.length > 0; index -= 1) {
+    const { seconds, least, most } = gates[index]!;
+    const decay = Math.exp(-seconds / tau);
+    polygon = clipPolygon(polygon, 1, decay, most + slack);
+    polygon = clipPolygon(polygon, -1, -decay, slack - least);
   }
-  return left;
+  return polygon;
 }
 
-/** The part of a convex polygon within a half-plane (Sutherland and Hodgman). */
-function clip(polygon: readonly Corner[], { a, b, c }: HalfPlane): readonly Corner[] {
-  const beyond = polygon.map(([end, amplitude]) => a * end + b * amplitude - c);
-  if (beyond.every((value) => value <= 0)) return polygon;
-  const kept: Corner[] = [];
-  polygon.forEach((corner, index) => {
-    const following = (index + 1) % polygon.length;
-    const next = polygon[following]!;
-    const [here, there] = [beyond[index]!, beyond[following]!];
-    if (here <= 0) kept.push(corner);
-    if (here <= 0 !== there <= 0) {
-      const share = here / (here - there);
-      kept.push([corner[0] + share * (next[0] - corner[0]), corner[1] + share * (next[1] - corner[1])]);
-    }
-  });
-  return kept;
-}
-
-function areaOf(polygon: readonly Corner[]): number {
-  return Math.abs(sumOverEdges(polygon, (cross) => cross)) / 2;
-}
-
-function centroidOf(polygon: readonly Corner[], area: number): Corner {
-  if (area < 1e-18) return polygon[0]!;
-  const signed = sumOverEdges(polygon, (cross) => cross) / 2;
-  return [
-    sumOverEdges(polygon, (cross, p, q) => (p[0] + q[0]) * cross) / (6 * signed),
-    sumOverEdges(polygon, (cross, p, q) => (p[1] + q[1]) * cross) / (6 * signed),
-  ];
-}
-
-/** Sums over the edges, corners taken relative to the first one so that thin polygons keep their area. */
-function sumOverEdges(polygon: readonly Corner[], term: (cross: number, p: Corner, q: Corner) => number): number {
-  let sum = 0;
-  for (let index = 0; index < polygon.length; index += 1) {
-    const p = polygon[index]!;
-    const q = polygon[(index + 1) % polygon.length]!;
-    sum += term(p[0] * q[1] - q[0] * p[1], p, q);
-  }
-  return sum;
+function arrivedArea(polygon: Polygon, tolerance: number): number {
+  const below = clipPolygon(polygon, 1, 0, 1 + tolerance);
+  return measurePolygon(clipPolygon(below, -1, 0, tolerance - 1)).area;
 }
 
 /** A finer grid over the time constants that are still possible, one neighbour on each side included. */
 function narrowed(outlooks: readonly TimeConstantOutlook[]): number[] {
-  const possible = outlooks.map(({ logWeight }) => Number.isFinite(logWeight));
-  const first = Math.max(0, possible.indexOf(true) - 1);
-  const last = Math.min(outlooks.length - 1, possible.lastIndexOf(true) + 1);
+  const isPossible = ({ logWeight }: TimeConstantOutlook) => Number.isFinite(logWeight);
+  const first = Math.max(0, outlooks.findIndex(isPossible) - 1);
+  const last = Math.min(outlooks.length - 1, outlooks.findLastIndex(isPossible) + 1);
   return logSpaced(outlooks[first]!.timeConstantSeconds, outlooks[last]!.timeConstantSeconds, GRID);
 }

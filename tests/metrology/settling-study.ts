@@ -8,6 +8,8 @@ import { seededRandom } from "../support/seeded-random";
 export interface GeneratedTrace {
   endOhms: number;
   timeConstantSeconds: number;
+  /** A second lag, as a filter behind the terminals has, as a share of the first. */
+  secondLag: number;
   /** What the planner would have believed. */
   plannedSeconds: number;
   startFraction: number;
@@ -21,6 +23,8 @@ export interface StudyOptions {
   seed: number;
   policy: UntilSteady;
   readings: number;
+  /** Share of the time constant that a second lag has; 0 for a plain exponential. */
+  secondLag: number;
 }
 
 export interface StudyTrial {
@@ -58,7 +62,7 @@ export const studyPolicy: UntilSteady = {
 /** Runs the detector over traces from one seed and compares it with an oracle that knows each end. */
 export function studySettling(options: StudyOptions): StudyResult {
   const random = seededRandom(options.seed);
-  const traces = Array.from({ length: options.traces }, () => generateTrace(random));
+  const traces = Array.from({ length: options.traces }, () => generateTrace(random, options.secondLag));
   const trials = traces.map((trace) => runTrial(trace, Math.floor(random() * 2 ** 31), options));
   const taken = trials.filter(({ outcome }) => outcome === "settled");
   const seconds = total(trials.map((trial) => trial.seconds));
@@ -75,7 +79,7 @@ export function studySettling(options: StudyOptions): StudyResult {
   };
 }
 
-function generateTrace(random: () => number): GeneratedTrace {
+function generateTrace(random: () => number, secondLag: number): GeneratedTrace {
   const between = (from: number, to: number) => from + random() * (to - from);
   const spread = (from: number, to: number) => Math.exp(between(Math.log(from), Math.log(to)));
   const timeConstantSeconds = spread(0.2, 30);
@@ -83,6 +87,7 @@ function generateTrace(random: () => number): GeneratedTrace {
   return {
     endOhms,
     timeConstantSeconds,
+    secondLag,
     plannedSeconds: timeConstantSeconds * spread(0.5, 2),
     startFraction: random() < 0.5 ? 0 : between(0.5, 0.9),
     noise: spread(1e-4, 2e-3),
@@ -124,10 +129,17 @@ function watchDisplay(trace: GeneratedTrace, display: (seconds: number) => numbe
 function displayOf(trace: GeneratedTrace, seed: number): (seconds: number) => number {
   return (seconds) => {
     const update = Math.round(seconds / trace.updateSeconds);
-    const approach = 1 - (1 - trace.startFraction) * Math.exp(-seconds / trace.timeConstantSeconds);
+    const approach = 1 - (1 - trace.startFraction) * remainder(seconds, trace);
     const noisy = trace.endOhms * (approach + trace.noise * normalNumber(seededRandom(seed + update)));
     return Math.max(0, Math.round(noisy / trace.stepOhms) * trace.stepOhms);
   };
+}
+
+/** What is left of a step after one or two lags in a row, as a fraction of it. */
+function remainder(seconds: number, { timeConstantSeconds, secondLag }: GeneratedTrace): number {
+  const first = Math.exp(-seconds / timeConstantSeconds);
+  if (secondLag === 0) return first;
+  return (first - secondLag * Math.exp(-seconds / (secondLag * timeConstantSeconds))) / (1 - secondLag);
 }
 
 /** One number of a standard normal distribution (Box and Muller). */
