@@ -2,26 +2,27 @@ import { ohms, volts, type Ohms, type Volts } from "./quantities";
 
 export type Parsed<T> = { ok: true; value: T } | { ok: false; message: string };
 
-const EXPONENTS: Readonly<Record<string, number>> = {
-  "": 0,
-  f: -15,
-  p: -12,
-  n: -9,
-  u: -6,
-  µ: -6,
-  μ: -6,
-  m: -3,
-  k: 3,
-  K: 3,
-  M: 6,
-  MEG: 6,
-  Meg: 6,
-  meg: 6,
-  G: 9,
-  g: 9,
-  T: 12,
-  t: 12,
-};
+/** Powers of ten of the prefixes as people type them; m is milli and M is mega, elsewhere case is forgiven. */
+const EXPONENTS: ReadonlyMap<string, number> = new Map([
+  ["", 0],
+  ["f", -15],
+  ["p", -12],
+  ["n", -9],
+  ["u", -6],
+  ["\u00b5", -6],
+  ["\u03bc", -6],
+  ["m", -3],
+  ["k", 3],
+  ["K", 3],
+  ["M", 6],
+  ["MEG", 6],
+  ["Meg", 6],
+  ["meg", 6],
+  ["G", 9],
+  ["g", 9],
+  ["T", 12],
+  ["t", 12],
+]);
 
 const QUANTITY = /^([+\-\u2212]?(?:\d+(?:[.,]\d*)?|[.,]\d+)(?:[eE][+\-\u2212]?\d+)?)\s*([a-zµμ]*?)$/iu;
 
@@ -36,7 +37,7 @@ export function parseQuantity(text: string, unitNames: readonly string[], what: 
   if (trimmed === "") return { ok: false, message: `Enter ${what}.` };
   const bare = stripUnit(trimmed, unitNames);
   const match = QUANTITY.exec(bare);
-  const exponent = match ? EXPONENTS[match[2] ?? ""] : undefined;
+  const exponent = match ? EXPONENTS.get(match[2] ?? "") : undefined;
   if (!match || exponent === undefined) return { ok: false, message: `“${text.trim()}” is not ${what}.` };
   const [mantissa = "", power = "0"] = match[1]!.replace(",", ".").replaceAll("\u2212", "-").split(/e/i);
   const value = Number(`${mantissa}e${Number(power) + exponent}`);
@@ -49,9 +50,16 @@ function stripUnit(text: string, unitNames: readonly string[]): string {
   return unit ? text.slice(0, text.length - unit.length).trimEnd() : text;
 }
 
-/** Reads a resistance above zero, for example `1.5 GΩ`. */
+/** The marking of resistors, where the prefix stands for the decimal point: `4k7`, `2R2`, `10R` (IEC 60062; from memory). */
+const RESISTOR_MARKING = /^(\d+)([RkKMGT])(\d*)(?=$|\s|\u03a9|\u2126)/u;
+
+/** Reads a resistance above zero, for example `1.5 GΩ` or `4k7`. */
 export function parseOhms(text: string): Parsed<Ohms> {
-  const parsed = parseQuantity(text, ["ohms", "ohm", "Ω", "Ω"], "a resistance such as 10 MΩ");
+  const plain = text.trim().replace(RESISTOR_MARKING, (_, whole: string, prefix: string, rest: string) => {
+    return `${whole}.${rest}${prefix === "R" ? "" : prefix}`;
+  });
+  // Lower case makes one letter of the Greek omega and the ohm sign.
+  const parsed = parseQuantity(plain, ["ohms", "ohm", "\u03a9"], "a resistance such as 10 MΩ");
   if (!parsed.ok) return parsed;
   return parsed.value > 0
     ? { ok: true, value: ohms(parsed.value) }
