@@ -50,7 +50,7 @@ function ForecastFigures({ choice, benches }: ForecastPanelProps) {
           { term: "Points", value: plan.points.length, mono: true },
           { term: "Left out", value: plan.excluded.length, mono: true },
           {
-            term: "Least ratio",
+            term: "Worst TUR",
             value:
               worst &&
               `${worst.ratio.toPrecision(2)} at ${shortOhms(worst.point.nominalOhms)}, ${formatTestVolts(worst.point.testVolts)}`,

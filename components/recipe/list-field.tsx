@@ -22,7 +22,8 @@ export function ListField(props: ListFieldProps) {
     <Field label={label} hint={`Understood: ${understood}${again}.`} error={problems.join(" ") || null}>
       <TextArea
         mono
-        rows={rows}
+        className="field-sizing-content"
+        style={{ minHeight: `${rows * 1.375 + 0.875}rem` }}
         value={value}
         placeholder={placeholder}
         spellCheck={false}

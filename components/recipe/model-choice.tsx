@@ -24,7 +24,8 @@ export function ModelChoice({ models, chosen, onChange, problems = [] }: ModelCh
             onChange(event.target.checked ? [...chosen, id] : chosen.filter((other) => other !== id))
           }
         >
-          {maker} {model} <span className="text-label text-ink-2">{listWords(testVolts.map(formatTestVolts))}</span>
+          {maker} {model}
+          <span className="block text-label text-ink-2">{listWords(testVolts.map(formatTestVolts))}</span>
         </Checkbox>
       ))}
       <FieldError message={problems.join(" ")} />

@@ -1,6 +1,6 @@
 "use client";
 
-import { useDeferredValue, useState } from "react";
+import { useDeferredValue, useRef, useState, type ReactNode } from "react";
 import { Select, TextArea, TextInput } from "@/components/ui/controls";
 import { Field, FieldError } from "@/components/ui/field";
 import { Note } from "@/components/ui/note";
@@ -26,31 +26,44 @@ export interface RecipeEditorProps {
   version: number;
   register: RecipeRegister;
   mayRelease: boolean;
+  /** Where this is and what it is called. */
+  heading: ReactNode;
 }
 
 /** Writes a recipe: what and for whom left, its points in the middle, settling and forecast right. */
-export function RecipeEditor({ recipeId, initial, version, register, mayRelease }: RecipeEditorProps) {
+export function RecipeEditor({ recipeId, initial, version, register, mayRelease, heading }: RecipeEditorProps) {
   const editor = useRecipeEditor({ recipeId, initial, register });
   const { form, change, parsed, problems } = editor;
   const [isReleasing, setIsReleasing] = useState(false);
   const document = useDeferredValue(parsed.document);
+  const formElement = useRef<HTMLFormElement>(null);
   const choice = useForecast({ document, modelIds: form.modelIds, benches: register.benches, models: register.models });
+
+  /** Asks for a right form, and brings the first wrong field to hand. */
+  const mayStore = () => {
+    const isRight = editor.ask();
+    if (!isRight) setTimeout(() => formElement.current?.querySelector<HTMLElement>("[aria-invalid=true]")?.focus());
+    return isRight;
+  };
 
   return (
     <form
+      ref={formElement}
       noValidate
       className="grid gap-4"
       onSubmit={(event) => {
         event.preventDefault();
-        if (editor.ask()) editor.save(false);
+        if (mayStore()) editor.save(false);
       }}
     >
       <EditorBar
+        heading={heading}
         version={version}
         isDirty={editor.isDirty}
         isSaving={editor.isSaving}
         cancelHref={recipeId ? `/recipes/${recipeId}` : "/recipes"}
-        onRelease={mayRelease ? () => setIsReleasing(editor.ask()) : undefined}
+        onRelease={mayRelease ? () => setIsReleasing(mayStore()) : undefined}
+        problemCount={Object.keys(problems).length}
       />
       {editor.failure && (
         <Note tone="bad" title="Not stored." alert>
@@ -58,8 +71,8 @@ export function RecipeEditor({ recipeId, initial, version, register, mayRelease 
         </Note>
       )}
       <FieldError message={problems.form?.join(" ")} />
-      <div className="grid items-start gap-4 lg:grid-cols-[300px_minmax(0,1fr)] 2xl:grid-cols-[300px_minmax(0,1fr)_330px]">
-        <Panel title="Recipe" className="2xl:row-span-2">
+      <div className="grid items-start gap-4 lg:grid-cols-[280px_minmax(0,1fr)] xl:grid-cols-[280px_minmax(0,1fr)_320px]">
+        <Panel title="Recipe">
           <RecipeFields editor={editor} />
         </Panel>
         <PointsPanel
@@ -74,7 +87,7 @@ export function RecipeEditor({ recipeId, initial, version, register, mayRelease 
           </p>
           <FieldError message={problems.points?.join(" ")} />
         </PointsPanel>
-        <div className="grid content-start gap-4 max-2xl:lg:col-span-2 max-2xl:lg:grid-cols-2">
+        <div className="grid content-start gap-4 lg:max-xl:col-span-2 lg:max-xl:grid-cols-2">
           <Panel title="Settling">
             <SettlingFields
               settling={form.settling}

@@ -98,9 +98,10 @@ function PointCell({ cell, isIncluded, cells, describe, onChange, isPresent, onF
   const forced = isIn && state?.kind === "forced-out" ? state.excluded : null;
   const text = planned?.text ?? (forced ? forcedWord(forced) : "");
   const looks = classNames(
-    "h-[31px] rounded border border-line p-0 text-center font-mono text-[0.8125rem]",
+    "h-[31px] rounded border p-0 text-center font-mono text-[0.8125rem]",
+    planned || forced ? "border-transparent" : "border-line",
     !isIn && "excluded",
-    forced && "border-transparent bg-ochre-tint text-label",
+    forced && "bg-ochre-tint text-label",
   );
   const tint = planned
     ? { background: `color-mix(in srgb, var(--water) ${Math.round(4 + 38 * planned.depth)}%, var(--panel))` }

@@ -49,7 +49,7 @@ export function RecipeView({ recipe, benches, models, children }: RecipeViewProp
                 ),
               },
               { term: "Readings", value: `${section.readingsPerPoint} a point, averaged` },
-              { term: "Order", value: orderWords[section.order] },
+              { term: "Order", value: `${orderWords[section.order]}, rising` },
               { term: "Judged by", value: ruleWords(document.decisionRule) },
               { term: "For", value: modelNames(modelIds, models) },
             ]}

@@ -48,8 +48,8 @@ export function settlingWords(policy: SettlingPolicy): { name: string; detail: s
 }
 
 export const orderWords: Readonly<Record<PointOrder, string>> = {
-  "by-voltage": "by voltage, rising",
-  "by-resistance": "by resistance, rising",
+  "by-voltage": "by voltage",
+  "by-resistance": "by resistance",
 };
 
 export function ruleWords(rule: DecisionRule): string {

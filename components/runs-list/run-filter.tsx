@@ -35,7 +35,7 @@ export function RunFilter({ benches }: { benches: readonly { id: string; name: s
   const [isPending, startTransition] = useTransition();
   const [filter, setFilter] = useQueryStates(filterParsers, { shallow: false, startTransition });
   return (
-    <search className="grid grid-cols-2 items-end gap-3 sm:flex sm:flex-wrap">
+    <search aria-busy={isPending} className="grid grid-cols-2 items-end gap-3 sm:flex sm:flex-wrap">
       <Field label="Search" className="col-span-2 min-w-56 flex-1">
         <TextInput
           type="search"
@@ -65,8 +65,8 @@ export function RunFilter({ benches }: { benches: readonly { id: string; name: s
         choices={shares.map((value) => [value, shareChoices[value]])}
         onChoose={(outside) => void setFilter({ outside, page: null })}
       />
-      <span role="status" className="min-w-14 self-center text-label text-ink-2">
-        {isPending ? "Looking" : ""}
+      <span role="status" className="sr-only">
+        {isPending ? "Looking for runs" : ""}
       </span>
     </search>
   );

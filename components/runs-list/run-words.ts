@@ -1,5 +1,5 @@
 import { endedStatuses, type RunStatus, type VerdictCounts } from "@/lib/schemas/run";
-import type { RunCondition } from "@/lib/schemas/run-event";
+import type { RunCondition, Verdict } from "@/lib/schemas/run-event";
 
 export const conditionWords: Readonly<Record<RunCondition, string>> = { "as-found": "As found", "as-left": "As left" };
 
@@ -26,4 +26,12 @@ export function countsInWords(counts: VerdictCounts, status: RunStatus): string 
     ...(counts.open > 0 ? [`${counts.open} ${endedStatuses.includes(status) ? "not measured" : "to come"}`] : []),
   ];
   return outside > 0 || inside === 0 ? notes.join(", ") : [`${inside} of ${total} inside`, ...notes].join(", ");
+}
+
+/** The verdict that a run's counts are marked with: the worst of its points; null where points are still missing or none says much. */
+export function markOf(counts: VerdictCounts): Verdict | null {
+  if (counts.outside > 0) return "outside";
+  if (counts.doubtful > 0) return "doubtful";
+  if (counts.unsettled > 0) return "unsettled";
+  return counts.inside > 0 && counts.inside === counts.total ? "inside" : null;
 }

@@ -1,10 +1,11 @@
 import Link from "next/link";
 import { StairLine } from "@/components/marks/stair-line";
+import { VerdictMark } from "@/components/marks/verdict";
 import { DataTable, TableHead, type Column } from "@/components/ui/data-table";
 import type { RunQuery, RunSummary } from "@/lib/schemas/run";
 import { formatDay, formatTimeOfDay } from "./format-day";
 import { runQueryPath, sortedBy } from "./run-query-url";
-import { conditionWords, countsInWords, statusWords } from "./run-words";
+import { conditionWords, countsInWords, markOf, statusWords } from "./run-words";
 
 type RunColumn = RunQuery["sort"] | "condition" | "by" | "status" | "stairs";
 
@@ -73,7 +74,9 @@ function RunRow({ run }: { run: RunSummary }) {
       <td className="py-1.5 max-sm:hidden">
         <StairLine groups={run.stairs} size="small" />
       </td>
-      <td>{countsInWords(run.counts, run.status)}</td>
+      <td>
+        <Counts run={run} />
+      </td>
       <td className="whitespace-nowrap max-md:hidden">{statusWords[run.status]}</td>
     </tr>
   );
@@ -84,5 +87,15 @@ function Started({ run }: { run: RunSummary }) {
     <time dateTime={new Date(run.startedAtMs).toISOString()} className="tabular">
       {formatDay(run.startedAtMs)}, {formatTimeOfDay(run.startedAtMs)}
     </time>
+  );
+}
+
+function Counts({ run: { counts, status } }: { run: RunSummary }) {
+  const mark = markOf(counts);
+  return (
+    <span className="flex items-baseline gap-2">
+      <span className="w-3 flex-none">{mark && <VerdictMark verdict={mark} />}</span>
+      {countsInWords(counts, status)}
+    </span>
   );
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { countsInWords } from "@/components/runs-list/run-words";
+import { countsInWords, markOf } from "@/components/runs-list/run-words";
 import type { VerdictCounts } from "@/lib/schemas/run";
 
 function counts(some: Partial<VerdictCounts>): VerdictCounts {
@@ -24,4 +24,17 @@ describe("the counts of a run in words", () => {
     expect(countsInWords(counts({ inside: 20, open: 42 }), "stopped")).toBe("20 of 62 inside, 42 not measured");
     expect(countsInWords(counts({ open: 62 }), "running")).toBe("62 to come");
   });
+});
+
+describe("the mark of a run", () => {
+  it.each([
+    [{ inside: 60, outside: 2, unsettled: 1 }, "outside"],
+    [{ inside: 60, doubtful: 2, unsettled: 1 }, "doubtful"],
+    [{ inside: 60, unsettled: 1 }, "unsettled"],
+    [{ inside: 62 }, "inside"],
+    [{ inside: 40, open: 22 }, null],
+    [{}, null],
+  ])("of %j is its worst verdict, and inside only for all points", (some, mark) =>
+    expect(markOf(counts(some))).toBe(mark),
+  );
 });

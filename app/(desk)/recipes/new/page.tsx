@@ -14,9 +14,13 @@ export default async function NewRecipePage() {
   return (
     <PageFrame>
       <div>
-        <Breadcrumb crumbs={[{ label: "Recipes", href: "/recipes" }, { label: "new" }]} />
-        <h1 className="mt-0.5">Write a recipe</h1>
         <RecipeEditor
+          heading={
+            <>
+              <Breadcrumb crumbs={[{ label: "Recipes", href: "/recipes" }, { label: "new" }]} />
+              <h1 className="mt-0.5">Write a recipe</h1>
+            </>
+          }
           initial={emptyRecipeForm}
           version={1}
           register={await loadRegister()}

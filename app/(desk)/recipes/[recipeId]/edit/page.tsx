@@ -19,15 +19,19 @@ export default async function EditRecipePage({ params }: { params: Promise<{ rec
   return (
     <PageFrame>
       <div>
-        <Breadcrumb
-          crumbs={[
-            { label: "Recipes", href: "/recipes" },
-            { label: newest.document.name, href: `/recipes/${recipeId}` },
-            { label: `version ${version}, draft${releasedNote(versions)}` },
-          ]}
-        />
-        <h1 className="mt-0.5">{newest.document.name}</h1>
         <RecipeEditor
+          heading={
+            <>
+              <Breadcrumb
+                crumbs={[
+                  { label: "Recipes", href: "/recipes" },
+                  { label: newest.document.name, href: `/recipes/${recipeId}` },
+                  { label: `version ${version}, draft${releasedNote(versions)}` },
+                ]}
+              />
+              <h1 className="mt-0.5">{newest.document.name}</h1>
+            </>
+          }
           recipeId={recipeId}
           initial={recipeFormOf(newest.document, newest.modelIds)}
           version={version}
