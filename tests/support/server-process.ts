@@ -5,7 +5,7 @@ import path from "node:path";
 import { fileURLToPath } from "node:url";
 
 const root = fileURLToPath(new URL("../..", import.meta.url));
-const READY = /^Stepwell is ready at (http:\/\/\S+)/mu;
+const READY = /^Stepwell is ready at (http:\/\/localhost:\d+)/mu;
 const START_TIMEOUT_MS = 150_000;
 
 export interface ServerProcess {
