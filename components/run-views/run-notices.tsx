@@ -18,7 +18,7 @@ export interface RunNoticesProps {
   failure: string | null;
 }
 
-/** What a person at this page has to know or do: a failed command, why the run stands still, or that it is over. */
+/** What a person at this page can do: about a failed command, about a run that stands still, about one that is over. */
 export function RunNotices({ runId, state, room, canResume, failure }: RunNoticesProps) {
   return (
     <>
@@ -38,29 +38,17 @@ function StandstillNote({ state, room, canResume }: Pick<RunNoticesProps, "state
   const next = resumeWords(state, canResume);
   switch (state.status) {
     case "faulted":
-      return (
-        <Note tone="bad" title={state.trouble?.message}>
-          {[state.trouble?.cure, change, next].filter(Boolean).join(" ")}
-        </Note>
-      );
+      return <Note tone="bad">{[state.trouble?.cure, change, next].filter(Boolean).join(" ")}</Note>;
     case "interrupted":
       return (
-        <Note tone="bad" title={state.interruption?.reason}>
-          {[
-            "The output is switched off by nobody’s hand but the bench’s own; look at the bench before you go on.",
-            change,
-            next,
-          ]
+        <Note tone="look">
+          {["Nothing switches the output on by itself: look at the bench first.", change, next]
             .filter(Boolean)
             .join(" ")}
         </Note>
       );
     case "held":
-      return (
-        <Note tone="look" title={`Held by ${state.hold?.by.name ?? "a person"}.`}>
-          {[state.hold?.reason, "The output is off.", change, next].filter(Boolean).join(" ")}
-        </Note>
-      );
+      return <Note tone="look">{["The output is off.", change, next].filter(Boolean).join(" ")}</Note>;
     default:
       return null;
   }

@@ -12,7 +12,7 @@ export interface RunTimes {
 /** A simulated bench's time may run faster than the wall's: what is left is told in the wall's time. */
 export function runTimes(state: RunState, nowMs: number): RunTimes {
   const speed = state.setup?.clockSpeed ?? 1;
-  const ahead = timeLeft(state);
+  const ahead = state.status === "running" ? timeLeft(state) : null;
   const left = ahead && {
     seconds: ahead.seconds / speed,
     spreadSeconds: ahead.spreadSeconds / speed,

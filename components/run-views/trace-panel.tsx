@@ -15,14 +15,8 @@ const VIEWS = [
   { value: "run", label: "Run" },
 ] as const;
 
-const NO_TRACE = {
-  samples: [],
-  standardOhms: null,
-  limitOhms: null,
-  expectedOhms: null,
-  fittedSeconds: null,
-  windowFromSeconds: null,
-};
+/** CSS pixels. */
+const TRACE_HEIGHT = 320;
 
 /** How this point came to its value, or how all points of the run came out in their order. */
 export function TracePanel({ state, stale = false }: { state: RunState; stale?: boolean }) {
@@ -34,13 +28,23 @@ export function TracePanel({ state, stale = false }: { state: RunState; stale?: 
       padding="flush"
     >
       <div className={classNames(stale && "opacity-60")}>
-        {view === "point" ? (
-          <PointTrace data={pointTraceData(state) ?? NO_TRACE} />
-        ) : (
-          <RunTrace points={runTracePoints(state)} />
-        )}
+        {view === "point" ? <LatestTrace state={state} /> : <RunTrace points={runTracePoints(state)} />}
       </div>
     </Panel>
+  );
+}
+
+/** Between two points the trace of the one just judged stays, so that nothing flickers. */
+function LatestTrace({ state }: { state: RunState }) {
+  const present = pointTraceData(state);
+  const [latest, setLatest] = useState(present);
+  if (present && present.samples !== latest?.samples) setLatest(present);
+  const shown = present ?? (state.status === "running" ? latest : null);
+  if (shown) return <PointTrace data={shown} height={TRACE_HEIGHT} />;
+  return (
+    <p className="px-3.5 py-3 text-ink-2" style={{ height: TRACE_HEIGHT + 8 }}>
+      No point is being measured.
+    </p>
   );
 }
 

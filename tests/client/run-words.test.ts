@@ -44,4 +44,5 @@ it("tells what is left in the wall's time when the bench's time runs faster", ()
   expect(left.seconds).toBeCloseTo(timeLeft(state)!.seconds / 60, 9);
   expect(left.doneAtMs).toBeCloseTo(1_000_000 + left.seconds * 1000, 3);
   expect(runTimes(foldAll(records), 0).left).toBeNull();
+  expect(runTimes({ ...fast, status: "held" }, 0).left).toBeNull();
 });
