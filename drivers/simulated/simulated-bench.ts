@@ -41,6 +41,7 @@ export class SimulatedBench {
   readonly #earlierViolations: string[] = [];
   readonly #options: SimulatedBenchOptions;
   #unit: Unit | null = null;
+  #linesReceived = 0;
 
   constructor(options: SimulatedBenchOptions) {
     const { bench, clock } = options;
@@ -52,6 +53,11 @@ export class SimulatedBench {
     }
     this.binding = new SimulatedBinding(this.#sockets, clock);
     this.#restore();
+  }
+
+  /** Lines that all devices have received. */
+  get linesReceived(): number {
+    return this.#linesReceived;
   }
 
   /** Breaches of safe order and of ratings since the bench was made. Every test ends with none. */
@@ -96,6 +102,7 @@ export class SimulatedBench {
   }
 
   #received({ role }: SimulatedDevice, line: string): void {
+    this.#linesReceived += 1;
     if (line.includes("?") || /^\*(CLS|ESE)/iu.test(line)) return;
     this.settings.push({ role, line, atMs: this.#options.clock.nowMs() });
     if (this.settings.length > KEPT_SETTINGS) this.settings.splice(KEPT_SETTINGS / 2, 1);

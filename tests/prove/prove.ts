@@ -11,7 +11,7 @@ async function prove(): Promise<void> {
     recipeName: "Full matrix",
     clockSpeed: 60,
     random: seededRandom(seed),
-    longestWaitMs: 4000,
+    longestWaitMs: 2400,
   });
   const { finalState, ...figures } = report;
   print(
