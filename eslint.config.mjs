@@ -14,6 +14,8 @@ const config = [
       eqeqeq: "error",
     },
   },
+  // Runs in a terminal before anything is installed.
+  { files: ["lib/launch/*.mjs"], rules: { "no-console": "off" } },
 ];
 
 export default config;

@@ -69,7 +69,7 @@ export class BenchManager {
 
   /** A run is being started or measured: its devices are not to be touched. */
   get isBusy(): boolean {
-    return this.#waiting > 0 || this.#active?.sequence != null;
+    return this.#waiting > 0 || (this.#active?.sequence ?? null) !== null;
   }
 
   snapshot(): BenchSnapshot {

@@ -103,7 +103,7 @@ function runningSeconds(state: RunState): number {
 const POINT_OVERHEAD_SECONDS = 2;
 
 function presentSeconds(state: RunState): number {
-  return state.active?.onSinceMs == null ? 0 : (state.elapsedMs - state.active.onSinceMs) / 1000;
+  return state.active && state.active.onSinceMs !== null ? (state.elapsedMs - state.active.onSinceMs) / 1000 : 0;
 }
 
 function sum(values: readonly number[]): number {

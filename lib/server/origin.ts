@@ -4,7 +4,7 @@ export function hostName(host: string): string {
 }
 
 export function isAllowedHost(host: string | undefined | null, allowedHosts: readonly string[]): boolean {
-  return host != null && allowedHosts.includes(hostName(host));
+  return host ? allowedHosts.includes(hostName(host)) : false;
 }
 
 /**

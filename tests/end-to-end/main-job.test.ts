@@ -31,24 +31,41 @@ describe("the main job", () => {
     await page.getByRole("button", { name: "Start the run" }).click();
     await page.waitForURL(/\/runs\/[0-9a-f-]{36}$/u);
     const runPath = new URL(page.url()).pathname;
-    await page.getByText(/point \d+ of 65/u).first().waitFor();
+    await page
+      .getByText(/point \d+ of 65/u)
+      .first()
+      .waitFor();
 
     const supervisor = await visitAs(browser, server.url, "ada.fenn@thornmere.example");
-    await supervisor.page.getByText(/point \d+ of 65/u).first().waitFor();
+    await supervisor.page
+      .getByText(/point \d+ of 65/u)
+      .first()
+      .waitFor();
     await supervisor.page.getByRole("link", { name: "Watch" }).first().click();
     await supervisor.page.waitForURL(`**${runPath}`);
 
     for (const watcher of [technician, supervisor]) {
       await watcher.page.getByText("The run is over.").waitFor({ timeout: 180_000 });
-      expect(await watcher.page.getByRole("table", { name: /Matrix/i }).getByText(/settling/u).count()).toBe(0);
+      expect(
+        await watcher.page
+          .getByRole("table", { name: /Matrix/i })
+          .getByText(/settling/u)
+          .count(),
+      ).toBe(0);
     }
 
     const reviewer = await visitAs(browser, server.url, "ruth.okafor@thornmere.example");
     await reviewer.page.goto(`${runPath}/results`);
-    await reviewer.page.getByText(/\d+ of 65 points outside/u).first().waitFor();
+    await reviewer.page
+      .getByText(/\d+ of 65 points outside/u)
+      .first()
+      .waitFor();
     await reviewer.page.getByRole("link", { name: "Replay" }).click();
     await reviewer.page.getByRole("button", { name: "Next outside limit" }).click();
-    await reviewer.page.getByText(/at 50.V/u).first().waitFor();
+    await reviewer.page
+      .getByText(/at 50.V/u)
+      .first()
+      .waitFor();
     await reviewer.page.waitForURL(/at=\d+/u);
     expect(await reviewer.page.getByText(/output on/iu).count()).toBe(0);
     for (const { faults, context } of [technician, supervisor, reviewer]) {
