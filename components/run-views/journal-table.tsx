@@ -8,7 +8,7 @@ import type { JournalRow } from "./course-of-run";
 import { runPath } from "./run-links";
 
 const COLUMNS = [
-  { id: "number", label: "Record", align: "right" },
+  { id: "number", label: "Record", align: "right", className: "max-sm:hidden" },
   { id: "time", label: "Time" },
   { id: "elapsed", label: "Run time", align: "right", className: "max-sm:hidden" },
   { id: "readings", label: "Readings before", align: "right", className: "max-sm:hidden" },
@@ -33,7 +33,7 @@ export function JournalTable({ runId, rows }: { runId: string; rows: readonly Jo
       <tbody>
         {rows.map(({ line, readingsBefore }) => (
           <tr key={line.seq} id={`record-${line.seq}`} className={classNames(TONES[line.tone])}>
-            <td className="figure w-16 text-ink-2">{line.seq}</td>
+            <td className="figure w-16 text-ink-2 max-sm:hidden">{line.seq}</td>
             <td className="w-24 font-mono tabular">
               <Link
                 href={`${runPath(runId, "replay")}?at=${line.seq}`}

@@ -9,6 +9,7 @@ import { Panel } from "@/components/ui/panel";
 import { Segmented } from "@/components/ui/segmented";
 import { pointName } from "@/lib/journal/describe-event";
 import type { RunState } from "@/lib/journal/run-state";
+import { isOver } from "@/lib/journal/selectors";
 
 const VIEWS = [
   { value: "point", label: "Point" },
@@ -20,11 +21,12 @@ const TRACE_HEIGHT = 320;
 
 /** How this point came to its value, or how all points of the run came out in their order. */
 export function TracePanel({ state, stale = false }: { state: RunState; stale?: boolean }) {
-  const [view, setView] = useState<"point" | "run">("point");
+  const [chosen, setChosen] = useState<"point" | "run" | null>(null);
+  const view = chosen ?? (isOver(state.status) && !state.active ? "run" : "point");
   return (
     <Panel
       title={view === "point" ? "Trace of this point" : "Errors in the order of the run"}
-      right={<Segmented label="What is drawn" value={view} segments={VIEWS} onChange={setView} />}
+      right={<Segmented label="What is drawn" value={view} segments={VIEWS} onChange={setChosen} />}
       padding="flush"
     >
       <div className={classNames(stale && "opacity-60")}>

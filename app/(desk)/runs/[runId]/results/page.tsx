@@ -57,7 +57,7 @@ export default async function ResultsPage({ params }: ResultsPageProps) {
         <aside className="grid gap-4">
           <VoltagePanel state={state} />
           <ConditionsPanel state={state} />
-          <ExcludedPanel excluded={state.setup?.plan.excluded ?? []} />
+          {state.setup && <ExcludedPanel plan={state.setup.plan} />}
           <CoursePanel runId={runId} lines={courseOfRun(events)} />
         </aside>
       </div>
