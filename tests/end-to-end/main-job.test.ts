@@ -67,7 +67,7 @@ describe("the main job", () => {
       .first()
       .waitFor();
     await reviewer.page.waitForURL(/at=\d+/u);
-    expect(await reviewer.page.getByText(/output on/iu).count()).toBe(0);
+    expect(await reviewer.page.getByText(/^OUTPUT ON/u).count()).toBe(0);
     for (const { faults, context } of [technician, supervisor, reviewer]) {
       expect(faults).toEqual([]);
       await context.close();
