@@ -28,9 +28,11 @@ export interface MatrixProps {
 export function Matrix(props: MatrixProps) {
   const { state, caption = "Error of each point in per cent of the standard’s value", legend = true, stale } = props;
   const table = matrixTable(state);
+  // Cells that are buttons bring themselves into view; otherwise the keyboard scrolls the table as a whole.
+  const scrolled = props.onSelect ? {} : { tabIndex: 0, role: "group", "aria-label": caption };
   return (
     <div className={classNames("px-2.5 pt-2 pb-3", stale && "opacity-60")}>
-      <div className="overflow-x-auto">
+      <div className="overflow-x-auto" {...scrolled}>
         <table
           className="w-full table-fixed border-separate border-spacing-[3px]"
           style={{ minWidth: `${5.75 + table.testVolts.length * 7.3}rem` }}

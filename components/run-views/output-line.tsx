@@ -8,7 +8,7 @@ import { formatTerminalVolts } from "@/lib/units/format";
  */
 export function OutputLine({ output, benchName }: { output: OutputState; benchName: string }) {
   return (
-    <>
+    <section aria-label="Output">
       <div className="min-h-2.5 bg-sunken sm:hidden">
         <HatchStrip output={output} benchName={benchName} size="edge" />
       </div>
@@ -19,7 +19,7 @@ export function OutputLine({ output, benchName }: { output: OutputState; benchNa
           <HatchStrip output={output} benchName={benchName} />
         )}
       </div>
-    </>
+    </section>
   );
 }
 

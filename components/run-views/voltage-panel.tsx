@@ -6,7 +6,7 @@ import { formatErrorPercent, formatTestVolts } from "@/lib/units/format";
 
 const COLUMNS = [
   { id: "voltage", label: "Voltage", align: "right" },
-  { id: "points", label: "Points", align: "right" },
+  { id: "points", label: "Points", align: "right", className: "max-sm:hidden" },
   { id: "outside", label: "Outside", align: "right" },
   { id: "mean", label: "Mean error %", align: "right" },
   { id: "worst", label: "Greatest %", align: "right" },
@@ -29,7 +29,7 @@ export function VoltagePanel({ state }: { state: RunState }) {
                 <th scope="row" className="figure font-medium">
                   {formatTestVolts(testVolts)}
                 </th>
-                <td className="figure">{points.length}</td>
+                <td className="figure max-sm:hidden">{points.length}</td>
                 <td className={outside > 0 ? "figure font-semibold text-brick" : "figure"}>{outside}</td>
                 <td className="figure">{errors.length > 0 ? formatErrorPercent(meanOf(errors)) : "–"}</td>
                 <td className="figure">{greatestWords(points)}</td>
