@@ -42,7 +42,7 @@ export function RecipeMatrix(props: RecipeMatrixProps) {
   };
 
   return (
-    <div className="overflow-x-auto">
+    <div className="overflow-x-auto" {...(onChange ? {} : { tabIndex: 0, role: "group", "aria-label": "Points" })}>
       <table
         ref={table}
         onKeyDown={onChange && move}
@@ -51,7 +51,7 @@ export function RecipeMatrix(props: RecipeMatrixProps) {
         <caption className="sr-only">Points: resistances down, test voltages across</caption>
         <thead>
           <tr>
-            <td className="w-[92px]" />
+            <td className="sticky left-0 z-10 w-[92px] bg-panel max-sm:w-[84px]" />
             {testVolts.map((value) => (
               <th key={value} scope="col" className="px-1 pt-0.5 pb-1.5 text-center font-mono text-small font-semibold">
                 {formatTestVolts(value)}
@@ -62,7 +62,7 @@ export function RecipeMatrix(props: RecipeMatrixProps) {
         <tbody>
           {nominalOhms.map((ohms, row) => (
             <tr key={ohms}>
-              <th scope="row" className="figure pr-2 text-small font-medium">
+              <th scope="row" className="figure sticky left-0 z-10 bg-panel pr-2 text-small font-medium">
                 {formatOhms(ohms)}
               </th>
               {testVolts.map((volts, column) => (

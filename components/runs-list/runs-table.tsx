@@ -93,7 +93,7 @@ function Started({ run }: { run: RunSummary }) {
 function Counts({ run: { counts, status } }: { run: RunSummary }) {
   const mark = markOf(counts);
   return (
-    <span className="flex items-baseline gap-2">
+    <span className="flex items-center gap-2">
       <span className="w-3 flex-none">{mark && <VerdictMark verdict={mark} />}</span>
       {countsInWords(counts, status)}
     </span>

@@ -34,6 +34,7 @@ export function RecipeChoice({ recipes, unit, recipe, onChoose, plan, clockSpeed
       </label>
       <SearchChoice
         id="recipe"
+        name="Recipe"
         describedBy="recipe-note"
         placeholder="Part of its name"
         groups={groups.filter(({ items }) => items.length > 0)}

@@ -11,6 +11,8 @@ export interface ChoiceGroup<T> {
 
 export interface SearchChoiceProps<T> {
   id: string;
+  /** The label's words; the label itself is out of reach of assistive technology while the list is open. */
+  name: string;
   /** Id of the sentence under the field. */
   describedBy: string;
   placeholder: string;
@@ -51,6 +53,7 @@ export function SearchChoice<T extends object>(props: SearchChoiceProps<T>) {
       <Combobox.InputGroup className="relative flex h-9 items-center rounded border border-line-strong bg-panel has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-water max-sm:h-12">
         <Combobox.Input
           id={props.id}
+          aria-label={props.name}
           aria-describedby={props.describedBy}
           placeholder={props.placeholder}
           className="h-full w-full min-w-0 bg-transparent px-2.5 text-text outline-none placeholder:text-ink-2"
@@ -63,11 +66,11 @@ export function SearchChoice<T extends object>(props: SearchChoiceProps<T>) {
       </Combobox.InputGroup>
       <Combobox.Portal>
         <Combobox.Positioner sideOffset={3} className="z-20">
-          <Combobox.Popup className="max-h-[min(24rem,var(--available-height))] w-(--anchor-width) overflow-y-auto rounded border border-line-strong bg-panel">
+          <Combobox.Popup className="w-(--anchor-width) rounded border border-line-strong bg-panel">
             <Combobox.Empty>
               <p className="px-2.5 py-2 text-small text-ink-2 empty:hidden">{props.notice}</p>
             </Combobox.Empty>
-            <Combobox.List>
+            <Combobox.List className="max-h-[min(24rem,var(--available-height))] scroll-py-1 overflow-y-auto overscroll-contain">
               {(group: ItemGroup<T>) => <ChoiceList key={group.value} group={group} {...props} />}
             </Combobox.List>
           </Combobox.Popup>

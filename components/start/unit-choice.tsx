@@ -33,6 +33,7 @@ export function UnitChoice({ unit, onChoose, lastRun }: UnitChoiceProps) {
       </label>
       <SearchChoice
         id="unit"
+        name="Unit under test"
         describedBy="unit-note"
         placeholder="Part of the asset or serial number, such as 0412"
         groups={[{ title: "", items: units.data ?? [] }]}

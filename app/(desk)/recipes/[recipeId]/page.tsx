@@ -30,7 +30,7 @@ export default async function RecipePage({ params, searchParams }: RecipePagePro
     <PageFrame>
       <div>
         <div className="flex flex-wrap items-start gap-x-4 gap-y-3">
-          <div className="min-w-0 flex-1">
+          <div className="min-w-0 flex-1 max-sm:basis-full">
             <Breadcrumb crumbs={[{ label: "Recipes", href: "/recipes" }, { label: whichVersion(recipe, versions) }]} />
             <h1 className="mt-0.5">{recipe.document.name}</h1>
             {recipe.document.purpose && <p className="mt-1 max-w-prose text-ink-2">{recipe.document.purpose}</p>}
