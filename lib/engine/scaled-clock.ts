@@ -1,3 +1,4 @@
+import { abortableSleep } from "./abortable-sleep";
 import type { Clock } from "./clock";
 
 const LOWEST_SPEED = 1;
@@ -45,18 +46,7 @@ export class ScaledClock implements Clock {
   }
 
   sleep(ms: number, signal?: AbortSignal): Promise<void> {
-    return new Promise((resolve, reject) => {
-      if (signal?.aborted) return reject(signal.reason as Error);
-      const onAbort = () => {
-        cancel();
-        reject(signal?.reason as Error);
-      };
-      const cancel = this.schedule(ms, () => {
-        signal?.removeEventListener("abort", onAbort);
-        resolve();
-      });
-      signal?.addEventListener("abort", onAbort, { once: true });
-    });
+    return abortableSleep(this, ms, signal);
   }
 
   schedule(ms: number, callback: () => void): () => void {
