@@ -87,11 +87,23 @@ export class BenchRoster {
   /** Carries out a person's command once, however often it is sent. */
   async command(runId: string, command: RunCommand, by: Actor): Promise<void> {
     const { commandsSeen } = this.dependencies.repositories;
+    if (command.kind === "stop") return this.#stop(runId, command, by);
     const isFirst = await commandsSeen.claim(command.id, runId);
-    if (!isFirst) return;
+    if (isFirst) await this.#requireActive(runId).command(runId, command, by);
+  }
+
+  /** A stop acts before its id is stored: an output that is on must not wait for the disk. */
+  async #stop(runId: string, command: RunCommand, by: Actor): Promise<void> {
+    const { commandsSeen } = this.dependencies.repositories;
+    if (!this.#managerOf(runId) && (await commandsSeen.find(command.id))) return;
+    await this.#requireActive(runId).command(runId, command, by);
+    await commandsSeen.claim(command.id, runId);
+  }
+
+  #requireActive(runId: string): BenchManager {
     const manager = this.#managerOf(runId);
     if (!manager) throw new EngineError("not-active", "This run is over; there is nothing to command.");
-    await manager.command(runId, command, by);
+    return manager;
   }
 
   /** Keeps lists in step with the journal and passes on what was committed. */
