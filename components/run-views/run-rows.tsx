@@ -1,6 +1,8 @@
 import Link from "next/link";
 import type { ReactNode } from "react";
 import { StairLine } from "@/components/marks/stair-line";
+import { classNames } from "@/components/ui/class-names";
+import { formatDay } from "@/components/runs-list/format-day";
 import { DataTable } from "@/components/ui/data-table";
 import { Panel } from "@/components/ui/panel";
 import type { RunSummary } from "@/lib/schemas/run";
@@ -36,6 +38,11 @@ export function RunRows({ title, rows, empty, right, withStairs = false }: RunRo
                   >
                     {run.unitName}, {run.assetNumber}
                   </Link>
+                </td>
+                <td
+                  className={classNames("whitespace-nowrap text-ink-2 max-sm:hidden", withStairs && "max-2xl:hidden")}
+                >
+                  {formatDay(run.startedAtMs)}
                 </td>
                 {withStairs && (
                   <td className="w-40 max-xl:hidden">
