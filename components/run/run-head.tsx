@@ -31,7 +31,7 @@ export function RunHead({ crumbs, title, sentence, times, commands }: RunHeadPro
         <StateLine sentence={sentence} className="mt-0.5" />
       </div>
       {times && <RunTimesFacts times={times} />}
-      {commands && <div className="flex flex-wrap gap-2 max-sm:w-full">{commands}</div>}
+      {commands && <div className="ml-auto flex flex-wrap gap-2 max-sm:ml-0 max-sm:w-full">{commands}</div>}
     </div>
   );
 }
