@@ -21,7 +21,7 @@ export function MatrixPanel({ state, note = "error, % of the standard’s value"
       right={rule && `limits: unit statement · rule: ${ruleWords(rule).short}`}
       padding="flush"
     >
-      <Matrix state={state} {...matrix} />
+      <Matrix state={state} caption="Matrix of errors in per cent of the standard’s value" {...matrix} />
     </Panel>
   );
 }
