@@ -1,10 +1,10 @@
-import { VerdictWord, type PointVerdict } from "@/components/marks/verdict";
-import { countsInWords, statusWords } from "@/components/runs-list/run-words";
-import { endedStatuses, type RunSummary, type VerdictCounts } from "@/lib/schemas/run";
+import { VerdictWord } from "@/components/marks/verdict";
+import { countsInWords, markOf, statusWords } from "@/components/runs-list/run-words";
+import { endedStatuses, type RunSummary } from "@/lib/schemas/run";
 
 /** The worst verdict of a run as mark and word, and its counts. Before the end only an outside point is a verdict. */
 export function OutcomeWord({ run }: { run: Pick<RunSummary, "counts" | "status"> }) {
-  const verdict = worstVerdict(run.counts);
+  const verdict = markOf(run.counts);
   const isSure = endedStatuses.includes(run.status) || verdict === "outside";
   return (
     <span className="inline-flex flex-wrap items-center gap-x-3">
@@ -16,11 +16,4 @@ export function OutcomeWord({ run }: { run: Pick<RunSummary, "counts" | "status"
       <span className="text-small text-ink-2">{countsInWords(run.counts, run.status)}</span>
     </span>
   );
-}
-
-function worstVerdict(counts: VerdictCounts): PointVerdict | null {
-  if (counts.outside > 0) return "outside";
-  if (counts.unsettled > 0) return "unsettled";
-  if (counts.doubtful > 0) return "doubtful";
-  return counts.inside > 0 ? "inside" : null;
 }
