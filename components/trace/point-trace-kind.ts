@@ -19,7 +19,7 @@ export const pointTraceKind: PlotKind<PointTraceData> = {
       y: { range: () => ohmRange(read.frame()) },
     },
     axes: [
-      axis({ colours: read.colours, size: 28, space: 70, values: (_, splits) => splits.map(String) }, "bottom", false),
+      axis({ colours: read.colours, size: 28, space: 70, values: secondsBeforeEnd }, "bottom", false),
       axis(
         {
           colours: read.colours,
@@ -165,6 +165,11 @@ function drawWindowWord(pen: Pen, read: Reader): void {
     size: 11.5,
     align: "center",
   });
+}
+
+/** The figures of the time axis; its end belongs to the unit. */
+function secondsBeforeEnd(plot: uPlot, splits: number[]): string[] {
+  return splits.map((second) => (second === plot.scales.x?.max ? "" : String(second)));
 }
 
 /** The unit of each axis at its end. */
