@@ -6,11 +6,12 @@ export const MINUS = "\u2212";
 /** Stands for a number that is none. */
 export const NO_VALUE = "–";
 
+/** Micro is U+03BC, the Greek letter that our fonts carry. */
 const PREFIXES: ReadonlyMap<number, string> = new Map([
   [-15, "f"],
   [-12, "p"],
   [-9, "n"],
-  [-6, "µ"],
+  [-6, "μ"],
   [-3, "m"],
   [0, ""],
   [3, "k"],
