@@ -16,7 +16,7 @@ export interface LiveLink {
 const DOUBTFUL_AFTER_MS = 2500;
 
 const TURNED_AWAY_PAUSE_MS = 2000;
-const SESSION_ENDED = "This session has ended.";
+const SESSION_ENDED = "This session has ended. Load the page again to sign in.";
 
 let shared: LiveLink | null = null;
 
