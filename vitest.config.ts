@@ -6,7 +6,7 @@ export default defineConfig({
   test: {
     include: ["tests/**/*.test.{ts,tsx}"],
     exclude: ["tests/end-to-end/**", "node_modules/**"],
-    testTimeout: 20_000,
+    testTimeout: 120_000,
     maxWorkers: 2,
   },
 });
