@@ -13,9 +13,11 @@ import type { DisplayValue } from "./settling-trace";
 /** A trace made ready for fitting: values relative to the latest one, times from the first one. */
 export interface SmoothTrace {
   values: readonly DisplayValue[];
-  /** Display step, relative to the latest value. */
+  /** What the values are relative to: the latest of them, or the display's step where that is larger. */
+  scaleOhms: number;
+  /** Display step, relative to the scale. */
   step: number;
-  /** Tolerance for having arrived, relative to the latest value. */
+  /** Tolerance for having arrived, relative to the scale. */
   tolerance: number;
   plannedSeconds: number;
 }
@@ -66,7 +68,7 @@ const USUAL_AMPLITUDE = 1;
  */
 export function fitSmooth(trace: SmoothTrace): SmoothFit | null {
   if (trace.values.length < 3) return null;
-  const bins = binned(trace.values);
+  const bins = binned(trace);
   const usual = USUAL_SCATTER ** 2 + trace.step ** 2 / 12;
   let taus = logSpaced(LEAST_SECONDS, MOST_SECONDS, GRID);
   let variance = usual;
@@ -81,8 +83,7 @@ export function fitSmooth(trace: SmoothTrace): SmoothFit | null {
   return joined && { ...joined, scatter: Math.sqrt(variance) };
 }
 
-function binned(values: readonly DisplayValue[]): Bin[] {
-  const scale = values.at(-1)!.ohms || 1;
+function binned({ values, scaleOhms }: SmoothTrace): Bin[] {
   const from = values[0]!.seconds;
   const size = Math.ceil(values.length / MOST_BINS);
   return Array.from({ length: Math.ceil(values.length / size) }, (_, index) => {
@@ -90,7 +91,7 @@ function binned(values: readonly DisplayValue[]): Bin[] {
     const count = group.length;
     return {
       seconds: group.reduce((sum, { seconds }) => sum + seconds, 0) / count - from,
-      value: group.reduce((sum, { ohms }) => sum + ohms, 0) / count / scale - 1,
+      value: group.reduce((sum, { ohms }) => sum + ohms, 0) / count / scaleOhms - 1,
       count,
     };
   });

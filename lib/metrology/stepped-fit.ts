@@ -17,7 +17,7 @@ export interface SteppedTrace {
   fromSeconds: number;
   nowSeconds: number;
   /** The latest display value: resistances are fitted relative to it. */
-  shownOhms: number;
+  scaleOhms: number;
   /** Display step and tolerance for having arrived, relative to the latest value. */
   step: number;
   tolerance: number;
@@ -68,9 +68,9 @@ export function fitStepped(trace: SteppedTrace): ExponentialOutlook | null {
 }
 
 /** The newest plateaus at their beginnings and ends: an exponential that passes there passes between. */
-function gatesOf({ plateaus, fromSeconds, shownOhms }: SteppedTrace): Gate[] {
+function gatesOf({ plateaus, fromSeconds, scaleOhms }: SteppedTrace): Gate[] {
   return plateaus.slice(-MOST_PLATEAUS).flatMap((plateau) => {
-    const bounds = { least: plateau.leastOhms / shownOhms, most: plateau.mostOhms / shownOhms };
+    const bounds = { least: plateau.leastOhms / scaleOhms, most: plateau.mostOhms / scaleOhms };
     const first = { seconds: plateau.fromSeconds - fromSeconds, ...bounds };
     if (plateau.toSeconds === plateau.fromSeconds) return [first];
     return [first, { seconds: plateau.toSeconds - fromSeconds, ...bounds }];
