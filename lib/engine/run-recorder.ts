@@ -5,7 +5,7 @@ import type { Clock } from "./clock";
 import { EngineError } from "./engine-error";
 
 /** Readings are committed at once after a quiet spell, else gathered for so many real milliseconds. */
-const GATHER_MS = 50;
+const GATHER_MS = 15;
 
 export interface RecorderDependencies {
   runId: string;
