@@ -25,7 +25,7 @@ const SHOWN_UNCERTAINTY = 0.2;
 /** The fit looks at the last part of the way, from this far off the present value: what went before may have had another course. */
 const FITTED_PART = 0.2;
 /** And not at the first part of the time, so that no beginning, however odd, is held against a trace for ever. */
-const FORGOTTEN_PART = 0.15;
+const FORGOTTEN_PART = 0.1;
 /** But at so many values or plateaus, as far as there are any. */
 const FITTED_VALUES = 8;
 const FITTED_PLATEAUS = 3;
