@@ -73,3 +73,14 @@ it("a page that was cut off says so, and is right again once it is back", async 
   await page.getByText("The run is over.").waitFor({ timeout: 30_000 });
   await context.close();
 });
+
+it("two benches run side by side, one run each", async () => {
+  const [north, window] = [await startRun("north", 60), await startRun("window", 60)];
+  await expect(startRun("north", 60)).rejects.toThrowError(/in use/u);
+  for (const runId of [north, window]) {
+    const judged = async () => (await client.state(runId)).points.filter((point) => point.outcome === "judged").length;
+    await eventually(async () => (await judged()) >= 3, 60_000, "three points are judged on each bench");
+    await client.command(runId, "stop");
+    expect((await client.state(runId)).status).toBe("stopped");
+  }
+});
