@@ -16,31 +16,26 @@ const MONTHS = ["Jan", "Feb", "Mar", "Apr", "May", "Jun", "Jul", "Aug", "Sep", "
  * Throws MetrologyError for a date that does not exist.
  */
 export function calibrationCheck(standards: readonly Standard[], today: string): PreflightCheck {
+  const head = { id: "calibration", title: "Standards in calibration" } as const;
   const dues = standards.map(({ maker, model, calibration }) => ({
-    text: `${maker} ${model} until ${formatDay(calibration.dueOn)}`,
+    name: `${maker} ${model}`,
+    day: formatDay(calibration.dueOn),
     daysLeft: daysOf(calibration.dueOn) - daysOf(today),
   }));
+  const overdue = dues.filter(({ daysLeft }) => daysLeft < 0);
+  if (overdue.length > 0) {
+    const finding = `overdue: ${overdue.map(({ name, day }) => `${name} since ${day}`).join(", ")}`;
+    const cure = "Calibrate the standard, or choose a bench whose standards are in date.";
+    return { ...head, state: "blocked", finding, cure };
+  }
   const least = Math.min(...dues.map(({ daysLeft }) => daysLeft));
-  const head = { id: "calibration", title: "Standards in calibration" } as const;
-  if (least < 0) {
-    const overdue = dues.filter(({ daysLeft }) => daysLeft < 0).map(({ text }) => text);
-    return {
-      ...head,
-      state: "blocked",
-      finding: `overdue: ${overdue.join(", ")}`,
-      cure: "Calibrate the standard, or choose a bench whose standards are in date.",
-    };
-  }
-  const finding = dues.map(({ text }) => text).join(", ") || "this bench has no standard that needs calibration";
-  if (least <= NOTICE_DAYS) {
-    return {
-      ...head,
-      state: "look",
-      finding,
-      cure: `A calibration ends in ${least} ${least === 1 ? "day" : "days"}: plan the next one.`,
-    };
-  }
-  return { ...head, state: "ready", finding, cure: null };
+  const finding = dues.map(({ name, day }) => `${name} until ${day}`).join(", ") || "no standard to be calibrated";
+  if (least > NOTICE_DAYS) return { ...head, state: "ready", finding, cure: null };
+  return { ...head, state: "look", finding, cure: `A calibration ends ${inDays(least)}: plan the next one.` };
+}
+
+function inDays(days: number): string {
+  return days === 0 ? "today" : `in ${days} ${days === 1 ? "day" : "days"}`;
 }
 
 /** Whether the ratings leave the recipe whole. Points left out by force are pointed out with a reason; no point left blocks. */
@@ -75,7 +70,7 @@ export function roomCheck(room: Room | null, limits: Bench["roomLimits"]): Prefl
     };
   }
   const celsius = `${room.celsius.toFixed(1)}${THIN_SPACE}°C`;
-  if (room.celsius < lowestCelsius || room.celsius > highestCelsius) {
+  if (!(room.celsius >= lowestCelsius && room.celsius <= highestCelsius)) {
     const cure = `Wait until the room is between ${lowestCelsius} and ${highestCelsius}${THIN_SPACE}°C.`;
     return { ...head, state: "blocked", finding: `${celsius} is outside`, cure };
   }
@@ -88,7 +83,7 @@ export function roomCheck(room: Room | null, limits: Bench["roomLimits"]): Prefl
     };
   }
   const humidity = `${room.humidityPercent.toFixed(0)}${THIN_SPACE}%`;
-  if (room.humidityPercent > highestHumidityPercent) {
+  if (!(room.humidityPercent <= highestHumidityPercent)) {
     const cure = `Wait until the humidity is below ${highestHumidityPercent}${THIN_SPACE}%.`;
     return { ...head, state: "blocked", finding: `${celsius} is inside, humidity ${humidity} is too high`, cure };
   }

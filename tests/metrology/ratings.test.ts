@@ -24,6 +24,19 @@ describe("decadeStresses", () => {
   });
 });
 
+describe("the loads for the rated current (R1: IEC 61557-2, 6.4, 1000 Ω for each volt)", () => {
+  it.each([
+    [50, 50e3],
+    [100, 100e3],
+    [250, 250e3],
+    [500, 500e3],
+    [1000, 1e6],
+  ])("draw 1 mA at %d V from %d Ω", (testVolts, nominalOhms) => {
+    const stresses = decadeStresses({ decade: decade(nominalOhms), position: 1, nominalOhms }, nominalOhms, testVolts);
+    expect(stresses.find(({ quantity }) => quantity === "amperes")?.value).toBeCloseTo(1e-3, 15);
+  });
+});
+
 describe("checkRating", () => {
   it("passes a setting that stands exactly what it is rated for", () => {
     const exact = box([decade(250e3, { ratedVolts: volts(250), ratedAmperes: amperes(1e-3), ratedWatts: 0.25 })]);
