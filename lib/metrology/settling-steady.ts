@@ -1,8 +1,7 @@
-import type { DisplayRange } from "@/lib/schemas/instrument";
 import type { UntilSteady } from "@/lib/schemas/settling";
-import type { ExponentialOutlook } from "./exponential";
 import type { SettlingAssessment, SettlingWatch } from "./settling";
-import { displayStepOhms, plateausOf, valuesInRange, type DisplayValue, type Plateau } from "./settling-trace";
+import { ARRIVED_FRACTION, foresee, toleranceFor, type Outlook } from "./settling-outlook";
+import { displayStepOhms, valuesInRange, type DisplayValue } from "./settling-trace";
 import {
   missingSentence,
   overRangeSentence,
@@ -10,28 +9,14 @@ import {
   unsettledSentence,
   type MissingCondition,
 } from "./settling-words";
-import { fitSmooth } from "./smooth-fit";
-import { fitLine, mean } from "./statistics";
-import { fitStepped } from "./stepped-fit";
+import { mean } from "./statistics";
 
-/** A point has arrived when its value lies this near to its expected end (as a fraction), or within half a display step. */
-export const ARRIVED_FRACTION = 0.005;
-/** How sure the fit must be of that. */
+/** How sure the fit must be that the value has arrived. */
 const SURE = 0.95;
-/** Without a fit the display must stand for three times the longest interval between its steps. */
+/** Where no exponential explains a coarse display, it must stand for three times the longest interval between its steps. */
 const HOLD_FACTOR = 3;
 /** An expected end with a larger relative uncertainty is not worth showing. */
 const SHOWN_UNCERTAINTY = 0.2;
-/** The fit looks at the last part of the way, from this far off the present value: what went before may have had another course. */
-const FITTED_PART = 0.2;
-/** And not at the first part of the time, so that no beginning, however odd, is held against a trace for ever. */
-const FORGOTTEN_PART = 0.1;
-/** But at so many values or plateaus, as far as there are any. */
-const FITTED_VALUES = 8;
-const FITTED_PLATEAUS = 3;
-/** A display this many times coarser than the scatter about the fit is read as plateaus. */
-const COARSE = 2;
-
 /** Less than any resistance tester shows; keeps ratios finite at zero. */
 const LEAST_OHMS = 1e-6;
 
@@ -44,21 +29,22 @@ interface Reading {
   scaleOhms: number;
   /** Display step relative to the scale. */
   step: number;
-  outlook: ExponentialOutlook | null;
+  outlook: Outlook | null;
 }
 
 /**
- * Until steady: over a window of several display updates the spread is within the policy or one display step, the drift
- * within the policy or half a step, and the value has arrived where an exponential fit expects the trace to end.
+ * Until steady: over a window of several display updates the spread is within the policy or one display step; what the
+ * fit expects to move within the coming minute is within the policy or half a step; and the value has arrived where the
+ * fit expects the trace to end.
  *
- * Where no exponential fits, the window is at least three times the longest interval between display steps so far.
- * At the greatest wait the point is unsettled.
+ * Where no exponential explains a coarse display, it must also have stood still for three times the longest interval
+ * between its steps so far. At the greatest wait the point is unsettled.
  */
 export function assessSteadiness(watch: SettlingWatch, policy: UntilSteady): SettlingAssessment {
   const last = watch.samples.at(-1);
   if (!last || last.ohms === null) return assessOverRange(watch, policy);
   const reading = readTrace(watch, policy);
-  const driftPercentPerMinute = driftOf(reading);
+  const driftPercentPerMinute = reading.outlook && 100 * reading.outlook.minuteMovement;
   const missing = missingConditions(watch, policy, reading, driftPercentPerMinute);
   const state = missing.length === 0 ? "settled" : reading.elapsed >= policy.mostSeconds ? "unsettled" : "watching";
   const shown = showOutlook(reading);
@@ -80,56 +66,8 @@ function readTrace(watch: SettlingWatch, policy: UntilSteady): Reading {
   const stepOhms = displayStepOhms(watch.ranges, shownOhms);
   const scaleOhms = Math.max(shownOhms, stepOhms, LEAST_OHMS);
   const step = stepOhms / scaleOhms;
-  const outlook = predict(watch, values, scaleOhms, step);
-  const least = Math.min(values.length, policy.displayUpdates);
-  const from = outlook ? Infinity : elapsed - HOLD_FACTOR * watch.longestStepSeconds;
-  const start = values.findIndex(({ seconds }, index) => index >= values.length - least || seconds >= from);
-  return { values, window: values.slice(start), elapsed, scaleOhms, step, outlook };
-}
-
-/**
- * What the trace is heading for, by least squares; where the display is coarse, by its plateaus. A coarse display has
- * arrived when both say so: the plateaus know nothing of noise, least squares nothing of steps.
- */
-function predict(watch: SettlingWatch, values: DisplayValue[], scaleOhms: number, step: number) {
-  const common = {
-    step,
-    tolerance: toleranceFor(step),
-    scaleOhms,
-    plannedSeconds: watch.timeConstantSeconds,
-  };
-  const smooth = fitSmooth({ ...common, values: lastPart(values) });
-  if (!smooth || step < ARRIVED_FRACTION || step < COARSE * smooth.scatter) return smooth;
-  const stepped = fitStepped({
-    ...common,
-    plateaus: lastPlateaus(values, watch.ranges),
-    fromSeconds: values[0]!.seconds,
-    nowSeconds: values.at(-1)!.seconds,
-  });
-  if (!stepped) return smooth;
-  return { ...stepped, arrivedProbability: Math.min(stepped.arrivedProbability, smooth.arrivedProbability) };
-}
-
-/** The larger of 0.5 % of the value and half a display step. */
-function toleranceFor(step: number): number {
-  return Math.max(ARRIVED_FRACTION, step / 2);
-}
-
-/** The values of the last part of the way and of the time. */
-function lastPart(values: readonly DisplayValue[]): readonly DisplayValue[] {
-  const { ohms: shownOhms, seconds: elapsed } = values.at(-1)!;
-  const isBefore = ({ ohms, seconds }: DisplayValue) =>
-    Math.abs(ohms - shownOhms) > FITTED_PART * shownOhms || seconds < FORGOTTEN_PART * elapsed;
-  const before = values.findLastIndex(isBefore);
-  return values.slice(Math.max(0, Math.min(before + 1, values.length - FITTED_VALUES)));
-}
-
-/** The plateaus of the last part of the time. */
-function lastPlateaus(values: readonly DisplayValue[], ranges: readonly DisplayRange[]): Plateau[] {
-  const plateaus = plateausOf(values, ranges);
-  const begin = FORGOTTEN_PART * values.at(-1)!.seconds;
-  const first = plateaus.findIndex(({ toSeconds }) => toSeconds >= begin);
-  return plateaus.slice(Math.max(0, Math.min(first, plateaus.length - FITTED_PLATEAUS)));
+  const outlook = foresee(watch, values, scaleOhms, step);
+  return { values, window: values.slice(-policy.displayUpdates), elapsed, scaleOhms, step, outlook };
 }
 
 function missingConditions(
@@ -142,9 +80,8 @@ function missingConditions(
   const missing: MissingCondition[] = [];
   if (elapsed < policy.leastSeconds) missing.push("least-wait");
   if (values.length < policy.displayUpdates) missing.push("window");
-  if (!outlook && elapsed - watch.lastStepSeconds < HOLD_FACTOR * watch.longestStepSeconds && step > ARRIVED_FRACTION) {
-    missing.push("hold");
-  }
+  const heldSeconds = elapsed - watch.lastStepSeconds;
+  if (outlook?.isTrustworthy === false && heldSeconds < HOLD_FACTOR * watch.longestStepSeconds) missing.push("hold");
   const driftBound = Math.max(policy.driftPercentPerMinute, 50 * step);
   if (driftPercentPerMinute === null || Math.abs(driftPercentPerMinute) > driftBound) missing.push("drift");
   const spread = spreadOf(window);
@@ -154,7 +91,7 @@ function missingConditions(
 }
 
 /** Whether a display whose step counts already stands, on the mean of the window, where the trace is expected to end. */
-function showsTheEnd({ window, scaleOhms, step }: Reading, { end }: ExponentialOutlook): boolean {
+function showsTheEnd({ window, scaleOhms, step }: Reading, { end }: Outlook): boolean {
   if (step < ARRIVED_FRACTION / 2) return true;
   const shown = mean(window.map(({ ohms }) => ohms)) / scaleOhms;
   return Math.abs(end - shown) <= toleranceFor(step);
@@ -163,16 +100,6 @@ function showsTheEnd({ window, scaleOhms, step }: Reading, { end }: ExponentialO
 function spreadOf(window: readonly DisplayValue[]): number {
   const values = window.map(({ ohms }) => ohms);
   return Math.max(...values) - Math.min(...values);
-}
-
-function driftOf({ outlook, window, scaleOhms }: Reading): number | null {
-  if (outlook) return 100 * outlook.minuteMovement;
-  if (window.length < 3) return null;
-  const { slope } = fitLine(
-    window.map(({ seconds }) => seconds),
-    window.map(({ ohms }) => ohms),
-  );
-  return (100 * 60 * slope) / scaleOhms;
 }
 
 function showOutlook({ outlook, scaleOhms }: Reading) {

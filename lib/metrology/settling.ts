@@ -30,8 +30,8 @@ export interface SettlingAssessment {
   /** 0 to 1, for the bar. */
   progress: number;
   /**
-   * Movement in per cent of the value a minute: what the exponential fit expects of the coming minute where it is
-   * trustworthy, else the slope over the window; null while the window is too short.
+   * Movement that the exponential fit expects of the coming minute, in per cent of the value; null while there are too
+   * few values. A straight slope would exaggerate it: an exponential slows down.
    */
   driftPercentPerMinute: number | null;
   /** Start of the watching window, in seconds since the output was switched on. */
