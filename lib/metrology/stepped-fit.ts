@@ -31,7 +31,7 @@ interface Gate {
   most: number;
 }
 
-const GRID = 20;
+const GRID = 16;
 const MOST_PLATEAUS = 12;
 /** How far a gate is widened, in display steps: wide while tau is searched for, then less; noise needs the last of it. */
 const SLACKS = [0.75, 0.3, 0.1];
