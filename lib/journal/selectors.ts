@@ -1,3 +1,4 @@
+import { POINT_OVERHEAD_SECONDS } from "@/lib/planning/forecast";
 import type { PlannedPoint } from "@/lib/schemas/plan";
 import type { RunCommand, RunStatus, StairGroup, StairStep, VerdictCounts } from "@/lib/schemas/run";
 import { endedStatuses } from "@/lib/schemas/run";
@@ -98,9 +99,6 @@ function runningSeconds(state: RunState): number {
     }),
   );
 }
-
-/** Discharge, dials, voltage and switching of one point. */
-const POINT_OVERHEAD_SECONDS = 2;
 
 function presentSeconds(state: RunState): number {
   return state.active && state.active.onSinceMs !== null ? (state.elapsedMs - state.active.onSinceMs) / 1000 : 0;
